@@ -1,0 +1,106 @@
+package scene
+
+import (
+	"epure/geom/body"
+	"epure/geom/cut"
+	"epure/geom/flat"
+	"epure/geom/surface"
+	"epure/geom/vec"
+)
+
+// Line is a straight line: through a point, along a unit vector, and with ends
+// where it has them (To lies on the side of Along).
+type Line struct {
+	Name    string // the thing or feature: "L", "K.axis", "K.generator(180°)"
+	Through vec.V3
+	Along   vec.V3
+	Ends    bool
+	From    vec.V3
+	To      vec.V3
+	// Generator is the solid of which it is a generator, or nil; Theta its angle in the solid's Angles frame, radians.
+	Generator *Solid
+	Theta     float64
+}
+
+// Plane is a plane with its frame (see vec.PlaneFrame) and what is known of it by construction.
+type Plane struct {
+	Name  string // "P", or "ground", "frontal", "side"
+	F     vec.Frame
+	Along []vec.V3 // unit directions that it was laid along
+}
+
+// Surface is the plane as a boundary, outward along its normal.
+func (p *Plane) Surface() surface.Plane { return surface.Plane{F: p.F} }
+
+// Solid is a body with its origin.
+type Solid struct {
+	Name  string
+	Body  *body.Body
+	Root  *Primitive
+	Cuts  []*Plane // the planes that cut it, in order; nil for the whole solid
+	Whole *Solid   // the uncut solid; itself when it is uncut
+}
+
+// Primitive is a right cone, frustum or cylinder as it was declared.
+type Primitive struct {
+	Name         string
+	Cylinder     bool
+	Base         vec.Frame // origin at the base's centre, Z along the axis toward the apex or top
+	Angles       vec.Frame // angles about the axis: see vec.AxisFrame
+	Radius       float64   // of the base, mm
+	TopRadius    float64   // mm; 0 for a cone, Radius for a cylinder
+	Height       float64   // mm
+	Side         surface.Ruled
+	SideFace     string // labels of the body's faces
+	BaseFace     string
+	TopFace      string
+	Apex         vec.V3  // cones and frusta
+	SlantOfWhole float64 // apex to base edge, mm; cones and frusta
+}
+
+// Face is a face of a solid, by its label.
+type Face struct {
+	Name   string // "K.base", "B.face(P)"
+	Solid  *Solid
+	Label  string
+	Circle *Circle // for the round ends of an uncut solid
+}
+
+// Circle is a circle of space.
+type Circle struct {
+	F vec.Frame // centre and plane
+	R float64   // mm
+}
+
+// Edge is an edge of a solid: the pieces where two faces meet.
+type Edge struct {
+	Name  string
+	Solid *Solid
+	Edges []body.Edge
+}
+
+// Section is a section of a solid by a plane.
+type Section struct {
+	Name string
+	*cut.Section
+	Of *Solid
+	By *Plane
+}
+
+// Sphere is a focal sphere.
+type Sphere struct {
+	Name string
+	cut.FocalSphere
+	Of *Section
+}
+
+// Development is the pattern of a curved face.
+type Development struct {
+	Name string
+	*flat.Pattern
+	Of        *Solid
+	Face      int // index in Of.Body.Faces
+	Seam      float64
+	Divisions int
+	InsideUp  bool
+}
