@@ -1,7 +1,11 @@
 // Package drawing holds the hand-off between composition and the writers: a
 // sheet of marks in paper millimetres, y up, origin at the sheet's lower left,
-// in drawing order. It holds types only, and the lowering of exact curves to
-// shapes that every writer knows.
+// in drawing order. Besides the types it holds what every writer and every
+// composer needs and must do alike: pens, dash patterns fitted to a length,
+// arrowheads, hatching, and the lowering of exact curves to shapes.
+//
+// Shapes stay as exact as paper formats allow: a conic keeps its equation until
+// a writer that lacks it asks for cubics.
 package drawing
 
 import "epure/geom/vec"
@@ -54,13 +58,14 @@ const (
 	LongDashTwoDot LineType = 5
 )
 
-// Pen draws a line of Width mm. Width 0 draws no line.
+// Pen draws a line of Width mm, continuous with round ends, or dashed with butt
+// ends (see DashesFor). Width 0 draws no line.
 type Pen struct {
 	Width float64
 	Type  LineType
 }
 
-// Grey is the lightness of a fill: 0 black.
+// Fill paints the inside of a closed shape, even-odd, when On.
 type Fill struct {
 	On   bool
 	Grey float64 // 0 black to 1 white
@@ -76,15 +81,16 @@ type Mark struct {
 	Title string // words for this mark (tooltip, reader), may be empty
 }
 
-// Shape is one of Line, Circle (arc), EllipseArc, Spline, Path and Text.
+// Shape is one of Line, EllipseArc, Quad, Spline, Path and Text.
 type Shape interface{ shape() }
 
 // Line is a straight line.
 type Line struct{ A, B vec.V2 }
 
 // EllipseArc is an arc of an ellipse or a circle (RX == RY): the points
-// C + R(Rot)·(RX cos t, RY sin t), From <= t <= To (radians, anticlockwise,
-// To-From at most 2π; a full turn is closed).
+// C + R(Rot)·(RX cos t, RY sin t) for t from From to To (radians). It runs
+// anticlockwise when From < To and clockwise when To < From, so that arcs chain
+// in a Path; |To-From| is at most 2π, and a full turn is closed.
 type EllipseArc struct {
 	C        vec.V2
 	RX, RY   float64
