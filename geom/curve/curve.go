@@ -22,6 +22,11 @@ const (
 	Ellipse                   // C + cos t·U + sin t·W; circles too
 	Parabola                  // C + t·U + t²·W
 	Hyperbola                 // C + cosh t·U + sinh t·W, one branch
+
+	// A conic whose centre lies very far off is held by its vertex C, so that no
+	// digits are lost: an ellipse with the centre C + U, a branch with C - U.
+	EllipseEnd   // C + (1 - cos t)·U + sin t·W
+	HyperbolaEnd // C + (cosh t - 1)·U + sinh t·W
 )
 
 // Curve is an unbounded curve of space. For a Line, U is a unit vector and t
@@ -39,6 +44,7 @@ type Curve2 struct {
 }
 
 // Arc is the part T0 <= t <= T1 of a curve. A whole ellipse has T1 = T0 + 2π.
+// The zero Form holds only the point C.
 type Arc struct {
 	Curve
 	T0, T1 float64
@@ -88,9 +94,25 @@ func (f Form) weights(t float64, n int) (u, w float64) {
 			return c, s
 		}
 		return s, c
+	case EllipseEnd:
+		if n == 0 {
+			h := math.Sin(t / 2)
+			return 2 * h * h, math.Sin(t)
+		}
+		c, s := Ellipse.weights(t, n)
+		return -c, s
+	case HyperbolaEnd:
+		if n == 0 {
+			h := math.Sinh(t / 2)
+			return 2 * h * h, math.Sinh(t)
+		}
+		return Hyperbola.weights(t, n)
 	}
-	panic("curve: invalid form")
+	return 0, 0
 }
+
+// Periodic tells whether the parameter comes round after 2π.
+func (f Form) Periodic() bool { return f == Ellipse || f == EllipseEnd }
 
 // At returns the point at t.
 func (c Curve) At(t float64) vec.V3 {
