@@ -1,10 +1,35 @@
-// Package flat unrolls the developable faces of a body to the plane: outline,
-// stations on generators, and the proof that what was unrolled folds back.
+// Package flat unrolls the curved face of a part of a cone or cylinder to the
+// plane: outline, stations on generators, measures, and the proof that what
+// was unrolled folds back.
+//
+// # Why this way
+//
+// The face is never sampled. In the natural coordinates (phi, u) of the
+// surface, phi the angle about the axis from the seam and u the place on the
+// generator, every plane meets a generator once, so that each edge of the face
+// is a profile u(phi) with three coefficients, or a piece of a generator. The
+// angles at which edges begin and end cut the turn into panels; in a panel the
+// profiles have a fixed order, and the material lies between the first and the
+// second, the third and the fourth (on a cone with the apex before the first
+// when their number is odd). Outline, stations, measures and bounds are read
+// from the panels in closed form or by roots that are bracketed for certain.
+//
+// # The flat plane
+//
+// A cone has its apex at (0, 0) and the seam along +x; the distance from the
+// apex is u and the angle at the apex is phi times the sine of the half angle.
+// A cylinder has x = radius times phi and y = u, the height along the
+// surface's F.Z over its F.O. Patterns are seen from outside: on a cylinder
+// with F.Z up phi grows to the right; on a cone with the apex up it grows
+// anticlockwise, on one with the apex down clockwise. With the inside up the
+// pattern is the exact mirror: y turns its sign on a cone, x on a cylinder.
 package flat
 
 import (
+	"fmt"
+	"math"
+
 	"epure/geom/body"
-	"epure/geom/curve"
 	"epure/geom/vec"
 )
 
@@ -15,38 +40,134 @@ type Options struct {
 	Inside    bool    // the inside is up: the exact mirror
 }
 
-// Path2 is a smooth curve of the flat plane.
-type Path2 interface {
-	At(t float64) vec.V2
-	Deriv(t float64, n int) vec.V2
-}
+// MinDivisions is the least number of even divisions of a turn: two would be
+// one flat plate, laid double.
+const MinDivisions = 3
 
-// Piece is a piece T0 <= t <= T1 (or backwards, T1 < T0) of a pattern's outline. Face is the
-// index of the body's other face along this edge, or Seam.
-type Piece struct {
-	Path   Path2
-	T0, T1 float64
-	Face   int
-}
-
-// Seam stands for the face of a piece that is one side of the seam.
-const Seam = -1
-
-// Station is one generator on the pattern.
-type Station struct {
-	Number    int     // 1 at the seam, then along the girth; 0 for an extreme between divisions; the last one is the seam again
-	Theta     float64 // angle of the generator in the surface's frame, radians
-	Lo, Hi    float64 // the piece inside the part, as u of the ruling, mm
-	Low, High vec.V2  // its ends on the pattern (at Lo and Hi)
-	Why       string  // for an extreme: "corner", "longest", "shortest" ...
-}
-
-// Pattern is the development of one curved face.
+// Pattern is the development of one curved face. It is immutable.
 type Pattern struct {
 	Loops    [][]Piece // closed outlines, anticlockwise as drawn
-	Stations []Station
-	curve    curve.Form
+	Stations []Station // in the order of the angle from the seam
+	body     *body.Body
+	face     int
+	roll     roll
+	rims     []rim
+	walls    []wall
+	panels   []panel
+	opts     Options
+	size     float64 // of the body, mm
 }
 
-// Of unrolls the curved face i of b.
-func Of(b *body.Body, i int, o Options) (*Pattern, error) { panic("todo") }
+// FaceError says why a face cannot be unrolled.
+type FaceError struct {
+	Face   string // label of the face, or its index when there is none
+	Reason string
+}
+
+// Error names the face and the reason.
+func (e *FaceError) Error() string { return e.Face + " cannot be unrolled: " + e.Reason }
+
+// DivisionsError is a number of divisions under MinDivisions.
+type DivisionsError struct{ Divisions int }
+
+// Error gives the number and the least one.
+func (e *DivisionsError) Error() string {
+	return fmt.Sprintf("%d divisions; there must be at least %d", e.Divisions, MinDivisions)
+}
+
+// Of unrolls the curved face i of b. It fails with *DivisionsError, or with
+// *FaceError when the face is no cone or cylinder, is bounded by something
+// else than planes, or its edges do not enclose it.
+func Of(b *body.Body, i int, o Options) (*Pattern, error) {
+	if o.Divisions < MinDivisions {
+		return nil, &DivisionsError{o.Divisions}
+	}
+	if i < 0 || i >= len(b.Faces) {
+		return nil, &FaceError{fmt.Sprintf("face %d", i), "the part has no such face"}
+	}
+	r, ok := newRoll(b.Faces[i].Surface, o)
+	if !ok {
+		return nil, &FaceError{b.Faces[i].Label, "it is neither a cone nor a cylinder"}
+	}
+	p := &Pattern{body: b, face: i, roll: r, opts: o, size: b.Size()}
+	if err := p.gather(b.Edges()); err != nil {
+		return nil, err
+	}
+	if err := p.divide(); err != nil {
+		return nil, err
+	}
+	var err error
+	if p.Loops, err = p.outline(); err != nil {
+		return nil, err
+	}
+	p.Stations = p.stations()
+	return p, nil
+}
+
+// Count is the number of pieces of material: one face is unrolled in one
+// piece, even when the seam leaves separate regions of it.
+func (p *Pattern) Count() int { return 1 }
+
+// Flat returns where the point q of the face lies on the pattern; a point of
+// the seam where phi is zero, if there is material. It fails with *OffError
+// when q does not lie on the face.
+func (p *Pattern) Flat(q vec.V3) (vec.V2, error) {
+	phi, u := p.roll.coords(q)
+	off := q.Dist(p.roll.space(phi, u))
+	if off > onFace*p.size {
+		return vec.V2{}, &OffError{Distance: off}
+	}
+	if phi > turn-sameAngle {
+		phi = 0
+	}
+	gap := beyond(p.at(phi), u)
+	if phi == 0 {
+		if other := beyond(p.at(turn), u); other < gap {
+			phi, gap = turn, other
+		}
+	}
+	if gap > onFace*p.size {
+		return vec.V2{}, &OffError{Distance: gap, OnSurface: true}
+	}
+	return p.roll.flat(phi, u), nil
+}
+
+// onFace is how far off the face, as a share of the body's size, a point may
+// lie that counts as on it: 1e-9 is what `verify` allows two equal lengths to
+// differ by, a thousand times the rounding of a point that was worked out from
+// a section.
+const onFace = 1e-9
+
+// OffError says that a point does not lie on the face.
+type OffError struct {
+	// Distance is how far it is from the surface, mm; or, when it lies on the
+	// surface but beyond the edges, how far along the generator (+Inf when the
+	// generator has nothing in the part).
+	Distance  float64
+	OnSurface bool
+}
+
+// Error gives the distance.
+func (e *OffError) Error() string {
+	switch {
+	case math.IsInf(e.Distance, 1):
+		return "the point lies on a generator that was cut away whole"
+	case e.OnSurface:
+		return fmt.Sprintf("the point lies %.6g mm beyond the edge of the face", e.Distance)
+	}
+	return fmt.Sprintf("the point lies %.6g mm off the face", e.Distance)
+}
+
+// beyond is the distance from u to the nearest of the spans.
+func beyond(spans []Span, u float64) float64 {
+	best := math.Inf(1)
+	for _, s := range spans {
+		best = min(best, max(0, s.Lo-u, u-s.Hi))
+	}
+	return best
+}
+
+// Fold returns the point of space at which the point q of the pattern comes to
+// lie when it is rolled up. It is the inverse of the isometry and knows nothing
+// of the outline.
+func (p *Pattern) Fold(q vec.V2) vec.V3 { return p.roll.space(p.roll.unflat(q)) }

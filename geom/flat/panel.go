@@ -1,0 +1,232 @@
+package flat
+
+import (
+	"cmp"
+	"fmt"
+	"math"
+	"slices"
+
+	"epure/geom/body"
+	"epure/geom/curve"
+	"epure/geom/surface"
+)
+
+// rim is an edge across the generators, from the angle from in [0, turn) to the
+// angle to, from < to <= from + turn.
+type rim struct {
+	profile
+	face     int // the body's other face
+	from, to float64
+	arc      curve.Arc
+	upper    bool // the material ends here for someone who goes along the generator
+}
+
+// wall is an edge along a generator.
+type wall struct {
+	face   int
+	phi    float64 // [0, turn)
+	lo, hi float64
+}
+
+// panel is a part a <= phi <= b of the turn in which the edges have a fixed order.
+type panel struct {
+	a, b  float64
+	spans []band
+}
+
+// band is the material of a panel between two rims; lo may be apex.
+type band struct{ lo, hi int }
+
+// apex stands for the rim at u = 0.
+const apex = -1
+
+// sameAngle is the angle in radians under which two ends of edges are one
+// corner. The two edges of a corner are cut to length apart from each other;
+// with planes that cross under 1e-3 rad on the surface the rounding of the
+// position, some 1e-15, becomes 1e-12 along them. 1e-10 leaves two digits more
+// and is 1e-5 mm on a radius of 100 m.
+const sameAngle = 1e-10
+
+// samePoint is the share of the body's size under which two ends along a
+// generator are one: sameAngle on an edge that runs at a slope of 100.
+const samePoint = 100 * sameAngle
+
+// gather takes the edges round the face out of all edges of the body.
+func (p *Pattern) gather(edges []body.Edge) error {
+	for _, e := range edges {
+		other := e.A
+		switch p.face {
+		case e.A:
+			other = e.B
+		case e.B:
+		default:
+			continue
+		}
+		if other == p.face {
+			continue
+		}
+		if e.Arc.Form == curve.Line {
+			p.walls = append(p.walls, p.roll.wallOf(e.Arc, other))
+			continue
+		}
+		pl, ok := p.body.Faces[other].Surface.(surface.Plane)
+		if !ok {
+			return p.fail("%s is not a plane", p.body.Faces[other].Label)
+		}
+		prof, ok := p.roll.profileOf(pl)
+		if !ok {
+			return p.fail("its edge on %s is curved and yet along generators", p.body.Faces[other].Label)
+		}
+		m := rim{profile: prof, face: other, arc: e.Arc}
+		m.from, m.to = p.roll.sweep(e.Arc)
+		p.rims = append(p.rims, m)
+	}
+	return nil
+}
+
+func (p *Pattern) fail(format string, args ...any) error {
+	return &FaceError{p.body.Faces[p.face].Label, fmt.Sprintf(format, args...)}
+}
+
+// wallOf returns the generator edge that the straight arc a is.
+func (r roll) wallOf(a curve.Arc, face int) wall {
+	phi, _ := r.coords(a.Mid())
+	_, lo := r.coords(a.Start())
+	_, hi := r.coords(a.End())
+	return wall{face, snap(phi), min(lo, hi), max(lo, hi)}
+}
+
+// sweep returns the range of phi over an arc across the generators. phi is
+// monotone along it, since a plane meets a generator once.
+func (r roll) sweep(a curve.Arc) (from, to float64) {
+	if a.T1-a.T0 > turn-sameAngle {
+		return 0, turn
+	}
+	t := (a.T0 + a.T1) / 2
+	first, last := a.Start(), a.End()
+	if r.f.Z.Dot(a.At(t).Sub(r.f.O).Cross(a.Deriv(t, 1))) < 0 {
+		first, last = last, first
+	}
+	from, _ = r.coords(first)
+	end, _ := r.coords(last)
+	from = snap(from)
+	to = from + wrap(end-from)
+	if to > turn-sameAngle && to < turn+sameAngle {
+		to = turn
+	}
+	return from, to
+}
+
+// snap moves an angle next to the seam on to it.
+func snap(phi float64) float64 {
+	if phi < sameAngle || phi > turn-sameAngle {
+		return 0
+	}
+	return phi
+}
+
+// covers tells whether the rim has a point at phi in [0, turn].
+func (m rim) covers(phi float64) bool {
+	return m.from <= phi && phi <= m.to || phi+turn <= m.to
+}
+
+// breaks returns 0, the angles in between at which edges begin, end or lie, and turn.
+func (p *Pattern) breaks() []float64 {
+	all := []float64{0}
+	for _, m := range p.rims {
+		all = append(all, wrap(m.from), wrap(m.to))
+	}
+	for _, w := range p.walls {
+		all = append(all, w.phi)
+	}
+	slices.Sort(all)
+	all = slices.CompactFunc(all, func(a, b float64) bool { return b-a < sameAngle })
+	for len(all) > 1 && all[len(all)-1] > turn-sameAngle {
+		all = all[:len(all)-1]
+	}
+	return append(all, turn)
+}
+
+// divide cuts the turn into panels and finds the material of each.
+func (p *Pattern) divide() error {
+	at := p.breaks()
+	for i := 1; i < len(at); i++ {
+		q := panel{a: at[i-1], b: at[i]}
+		mid := (q.a + q.b) / 2
+		var cross []int
+		if p.roll.cone {
+			cross = append(cross, apex)
+		}
+		for j, m := range p.rims {
+			if m.covers(mid) {
+				cross = append(cross, j)
+			}
+		}
+		slices.SortStableFunc(cross, func(a, b int) int {
+			return cmp.Compare(p.u(a, mid), p.u(b, mid))
+		})
+		if p.roll.cone && len(cross)%2 == 1 {
+			cross = cross[1:] // an even number of edges: the apex is not in the part
+		}
+		if len(cross)%2 == 1 {
+			return p.fail("its edges leave it open at %.6g°", (p.roll.seam+mid)*180/math.Pi)
+		}
+		for j := 0; j < len(cross); j += 2 {
+			q.spans = append(q.spans, band{cross[j], cross[j+1]})
+			p.rims[cross[j+1]].upper = true
+		}
+		p.panels = append(p.panels, q)
+	}
+	return nil
+}
+
+// u returns u on the rim j, or 0 for the apex.
+func (p *Pattern) u(j int, phi float64) float64 {
+	if j == apex {
+		return 0
+	}
+	return p.rims[j].u(phi)
+}
+
+// near returns the panels that hold phi: two at a break.
+func (p *Pattern) near(phi float64) []panel {
+	var in []panel
+	for _, q := range p.panels {
+		if q.a-sameAngle < phi && phi < q.b+sameAngle {
+			in = append(in, q)
+		}
+	}
+	return in
+}
+
+// at returns the spans of material on the generator at phi in [0, turn],
+// ascending. Where an edge lies along the generator both its sides count; at 0
+// and at turn only the side within the pattern.
+func (p *Pattern) at(phi float64) []Span {
+	var s []Span
+	for _, q := range p.near(phi) {
+		for _, b := range q.spans {
+			lo, hi := p.u(b.lo, phi), p.u(b.hi, phi)
+			s = append(s, Span{Lo: lo, Hi: max(lo, hi)})
+		}
+	}
+	s = union(s, samePoint*p.size)
+	for i := range s {
+		s[i].Low, s[i].High = p.roll.flat(phi, s[i].Lo), p.roll.flat(phi, s[i].Hi)
+	}
+	return s
+}
+
+// union joins spans that overlap or touch within tol.
+func union(s []Span, tol float64) []Span {
+	slices.SortStableFunc(s, func(a, b Span) int { return cmp.Compare(a.Lo, b.Lo) })
+	var out []Span
+	for _, x := range s {
+		if n := len(out); n > 0 && x.Lo <= out[n-1].Hi+tol {
+			out[n-1].Hi = max(out[n-1].Hi, x.Hi)
+			continue
+		}
+		out = append(out, x)
+	}
+	return out
+}
