@@ -168,3 +168,13 @@ func gauss(d func(float64) vec.V2, a, b float64) float64 {
 	}
 	return s * h
 }
+
+// Dir returns the unit vector at the angle (radians anticlockwise from
+// rightward). Whole quarter turns give whole components.
+func Dir(angle float64) vec.V2 {
+	s, c := math.Sincos(angle)
+	if q := angle / (math.Pi / 2); q == math.Round(q) {
+		s, c = math.Round(s), math.Round(c)
+	}
+	return vec.V2{X: c, Y: s}
+}
