@@ -62,16 +62,17 @@ type Text string
 // YesNo is yes or no.
 type YesNo bool
 
-// Triple is a point or displacement (Dim length, mm) or a direction (plain numbers).
+// Triple is a point or displacement (Of quantity.Length, mm), a direction (quantity.Number), or
+// (0, 0, 0), which goes for both (quantity.Zero).
 type Triple struct {
-	V   vec.V3
-	Dim quantity.Dim
+	V  vec.V3
+	Of quantity.Kind
 }
 
 // Pair is a point of a plane or of the paper (mm) or a direction in it.
 type Pair struct {
-	V   vec.V2
-	Dim quantity.Dim
+	V  vec.V2
+	Of quantity.Kind
 }
 
 // Unknown is the value of what could not be evaluated; it makes no further errors.
