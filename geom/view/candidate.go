@@ -1,0 +1,154 @@
+package view
+
+import (
+	"math"
+
+	"epure/geom/body"
+	"epure/geom/curve"
+	"epure/geom/surface"
+	"epure/geom/vec"
+)
+
+// cand is a candidate: a part of an edge, contour or wire whose image has no turn.
+type cand struct {
+	track
+	arc    curve.Arc // the whole edge
+	body   int
+	index  int // of the edge in its body, contours after edges; of a wire among wires
+	a, b   int
+	err    float64 // rounding error of a point of it or of its image, mm
+	box    box
+	z0, z1 float64 // depths
+	stops  []stop
+}
+
+// stop is a space parameter at which a candidate is split.
+type stop struct {
+	t    float64
+	rank uint8
+}
+
+// The ranks of stops: where several fall together the most exact one stands for all.
+const (
+	atEnd      uint8 = iota // an end of the curve
+	atTurn                  // where it crosses the plane of contact, or a surface
+	atCrossing              // where its image crosses another's
+	atShared                // taken over from a curve with the same image
+)
+
+// candidates are those of every body, edges before contours.
+func (s *scene) candidates() []cand {
+	var out []cand
+	for i, b := range s.bodies {
+		for k, e := range append(b.Edges(), b.Contour(s.f.Z)...) {
+			out = s.image(out, e, i, k)
+		}
+	}
+	return out
+}
+
+// image appends the candidates of one edge, with their ends and the stops where they meet bodies.
+func (s *scene) image(out []cand, e body.Edge, owner, index int) []cand {
+	err := Grain * (s.reach + reachOf(e.Arc))
+	z0, z1 := depths(e.Arc, s.f)
+	for _, k := range tracks(e.Arc, s.f, err) {
+		c := cand{track: k, arc: e.Arc, body: owner, index: index, a: e.A, b: e.B, err: err, box: boxOf(k.image), z0: z0, z1: z1}
+		c.stops = []stop{{k.t0, atEnd}, {k.t1, atEnd}}
+		s.meetBodies(&c)
+		out = append(out, c)
+	}
+	return out
+}
+
+// meetBodies stops c where its visibility may change without a crossing of
+// images: where it crosses the plane of contact of a curved surface that it
+// lies on (its image touches the contour's there), and where it pierces
+// another body.
+func (s *scene) meetBodies(c *cand) {
+	for _, k := range s.at(c.box, c.z0, c.z1, c.err) {
+		for _, p := range s.contact[k] {
+			c.stopAt(c.part3().Cross(p.F.O, p.F.Z, c.err), atTurn)
+		}
+		if k == c.body {
+			continue
+		}
+		for _, face := range s.bodies[k].Faces {
+			c.stopAt(pierce(c.part3(), face.Surface, c.err), atTurn)
+		}
+	}
+}
+
+// part3 is the part of the space curve that c stands for.
+func (c *cand) part3() curve.Arc { return curve.Arc{Curve: c.arc.Curve, T0: c.t0, T1: c.t1} }
+
+// stopAt adds stops at those of the space parameters ts that lie within c.
+func (c *cand) stopAt(ts []float64, rank uint8) {
+	for _, t := range ts {
+		if t > c.t0 && t < c.t1 {
+			c.stops = append(c.stops, stop{t, rank})
+		}
+	}
+}
+
+// contactPlanes are the planes in which sight along d touches the curved
+// faces: each holds the two contour generators of one. An edge on the surface
+// crosses this plane at a good angle where it only touches the contour's image.
+func contactPlanes(b *body.Body, d vec.V3) []surface.Plane {
+	var out []surface.Plane
+	for _, f := range b.Faces {
+		r := f.Surface.Contour(d)
+		if len(r) != 2 {
+			continue
+		}
+		// The second generator's point must not fall on the first: on a cone both start at the apex.
+		across := r[1].O.Along(r[1].D, b.Size()).Sub(r[0].O)
+		if n := r[0].D.Cross(across); n.Len() > 0 {
+			out = append(out, surface.Plane{F: vec.PlaneFrame(r[0].O, n)})
+		}
+	}
+	return out
+}
+
+// locate is the space parameter of c at the image of o's space parameter t; false when
+// that is not on c, ends included.
+func (c *cand) locate(o *cand, t float64) (float64, bool) {
+	s, ok := c.image.Param(o.point(t), 2*(c.err+o.err))
+	return c.space(s), ok
+}
+
+// pierce is where the arc meets the surface of another body; gap is the rounding error, mm.
+func pierce(a curve.Arc, s surface.Surface, gap float64) []float64 {
+	if p, ok := s.(surface.Plane); ok {
+		return a.Cross(p.F.O, p.F.Z, gap)
+	}
+	if a.Form == curve.Line {
+		return s.Roots(a.C, a.U)
+	}
+	t, ok := s.(surface.Traced)
+	if !ok {
+		return nil
+	}
+	f := vec.PlaneFrame(a.C, a.U.Cross(a.W))
+	var ts []float64
+	for _, c := range t.Trace(surface.Plane{F: f}, gap).Curves() {
+		pts, _ := curve.Meet(a.Project(f), whole(c.Project(f), reachOf(a)), gap)
+		for _, x := range pts {
+			ts = append(ts, x.TA)
+		}
+	}
+	return ts
+}
+
+// whole is the part of a curve, with its vectors square to each other, within r of the origin at least.
+func whole(c curve.Curve2, r float64) curve.Arc2 {
+	r += c.C.Len()
+	switch c.Form {
+	case curve.Ellipse, curve.EllipseEnd:
+		return curve.Arc2{Curve2: c, T0: -math.Pi, T1: math.Pi}
+	case curve.Hyperbola, curve.HyperbolaEnd:
+		t := math.Asinh(r / c.W.Len())
+		return curve.Arc2{Curve2: c, T0: -t, T1: t}
+	}
+	t := r / c.U.Len()
+	return curve.Arc2{Curve2: c, T0: -t, T1: t}
+}

@@ -1,0 +1,197 @@
+package view
+
+import (
+	"flag"
+	"fmt"
+	"math"
+	"math/rand/v2"
+	"testing"
+
+	"epure/geom/body"
+	"epure/geom/vec"
+)
+
+// A bigger count is run by hand: go test ./geom/view -run Random -scenes 100000 -timeout 0
+var scenes = flag.Int("scenes", 120, "random scenes")
+
+const seed = 20261
+
+// The bounds of the comparison, relative to the largest solid.
+//
+// blur: a point whose ray dips this deep or less into a solid may be told
+// either way; the package takes num.OnSurface = 1.5e-11 of its size in the middle of
+// an interval, which is at most twice as deep somewhere else.
+// near: a drawn piece may end this far from where it should, since images that touch cross there (see sliver).
+const (
+	blur = 4e-11
+	near = 4e-6
+)
+
+type randomScene struct {
+	name   string
+	solids []solid
+	bodies []*body.Body
+	f      vec.Frame
+	size   float64
+}
+
+func newRandom(k int) randomScene {
+	r := rand.New(rand.NewPCG(seed, uint64(k)))
+	s := randomScene{name: fmt.Sprintf("seed %d scene %d", seed, k), f: vec.ViewFrame(anywhere(r))}
+	square := k%2 == 1
+	if square || r.IntN(3) == 0 {
+		s.f = vec.ViewFrame(along(r))
+	}
+	for n := 1 + r.IntN(6); len(s.solids) < n; {
+		one := random(r, square)
+		if square && len(s.solids) > 0 && r.IntN(3) == 0 {
+			one = beside(r, s.solids[len(s.solids)-1])
+		}
+		if b, ok := one.body(); ok {
+			s.solids, s.bodies = append(s.solids, one), append(s.bodies, b)
+			s.size = max(s.size, one.size())
+		}
+	}
+	return s
+}
+
+// beside is a solid that touches s along a whole face: the other part of a cut, or a copy set on its end.
+func beside(r *rand.Rand, s solid) solid {
+	c := s
+	if len(s.cuts) > 0 && r.IntN(2) == 0 {
+		last := s.cuts[len(s.cuts)-1]
+		c.cuts = append(append([]vec.Frame{}, s.cuts[:len(s.cuts)-1]...), vec.PlaneFrame(last.O, last.Z.Neg()))
+		return c
+	}
+	c.f = s.f.At(s.f.Point(vec.V3{Z: s.h}))
+	c.cuts = nil
+	return c
+}
+
+// deepest is how deep the ray from p to the viewer runs in any of the solids.
+func (s randomScene) deepest(p vec.V3) float64 {
+	v := math.Inf(1)
+	for _, one := range s.solids {
+		v = min(v, one.cover(p, s.f.Z))
+	}
+	return v
+}
+
+func TestRandomScenes(t *testing.T) {
+	var points, rims int
+	for k := range *scenes {
+		s := newRandom(k)
+		pieces := Lines(s.bodies, s.f)
+		r := rand.New(rand.NewPCG(seed+1, uint64(k)))
+		points += s.checkPieces(t, r, pieces)
+		rims += s.checkRims(t, pieces)
+		if t.Failed() {
+			t.Fatal(s.name)
+		}
+	}
+	t.Logf("%d scenes, %d points of pieces, %d points of edges and contours", *scenes, points, rims)
+}
+
+// checkPieces takes random points of every piece: they lie on the boundary of their solid, their
+// image is the image of the space curve, they are as visible as the
+// piece says, and no second piece runs through them.
+func (s randomScene) checkPieces(t *testing.T, r *rand.Rand, pieces []Piece) (n int) {
+	for i, p := range pieces {
+		for range 4 {
+			n++
+			at := p.Image.T0 + (p.Image.T1-p.Image.T0)*(0.02+0.96*r.Float64())
+			q := p.Space.At(p.SpaceAt(at))
+			where := fmt.Sprintf("%s piece %d %+v at %v", s.name, i, p, q)
+			if v := s.solids[p.Body].value(q); math.Abs(v) > blur*s.size {
+				t.Errorf("%s: off the boundary by %g", where, v)
+			}
+			if d := s.f.Flat(q).Dist(p.Image.At(at)); d > blur*s.size {
+				t.Errorf("%s: image off by %g", where, d)
+			}
+			v := s.deepest(q)
+			if p.Visible != (p.Layers == 0) {
+				t.Errorf("%s: layers %d", where, p.Layers)
+			}
+			if p.Visible && v < -blur*s.size || !p.Visible && v > -0x1p-37*s.smallest() {
+				t.Errorf("%s: depth %g", where, v)
+			}
+			s.checkSingle(t, pieces, i, at, where)
+		}
+	}
+	return n
+}
+
+func (s randomScene) smallest() float64 {
+	v := math.Inf(1)
+	for _, b := range s.bodies {
+		v = min(v, b.Size())
+	}
+	return v
+}
+
+// checkSingle: no other piece runs along with piece i at its parameter at.
+func (s randomScene) checkSingle(t *testing.T, pieces []Piece, i int, at float64, where string) {
+	p := pieces[i].Image
+	q, e := p.At(at), p.Deriv(at, 1).Unit()
+	for j, o := range pieces {
+		if j == i {
+			continue
+		}
+		u, d := nearest(o, q)
+		along := math.Abs(o.Image.Deriv(u, 1).Unit().Cross(e)) < 1e-6
+		if d < 1e-9*s.size && along && u > o.Image.T0 && u < o.Image.T1 {
+			t.Errorf("%s: drawn again by piece %d %+v", where, j, o)
+		}
+	}
+}
+
+// checkRims: every point of an edge or contour, worked out without the package,
+// lies on a piece, and a visible one on a visible piece.
+func (s randomScene) checkRims(t *testing.T, pieces []Piece) (n int) {
+	for i, one := range s.solids {
+		for _, q := range one.rim(s.f.Z, 24) {
+			n++
+			v := s.deepest(q)
+			best, seen := math.Inf(1), math.Inf(1)
+			for _, p := range pieces {
+				if _, d := nearest(p, s.f.Flat(q)); p.Visible {
+					seen = min(seen, d)
+				} else {
+					best = min(best, d)
+				}
+			}
+			if min(best, seen) > near*s.size {
+				t.Errorf("%s solid %d: the edge point %v is not drawn: %g", s.name, i, q, best)
+			}
+			if v > -1e-12*s.size && seen > near*s.size {
+				t.Errorf("%s solid %d: the edge point %v is visible and drawn hidden: depth %g, distance %g", s.name, i, q, v, seen)
+			}
+		}
+	}
+	return n
+}
+
+// nearest is the parameter and distance of the point of the piece's image nearest q, by samples and a
+// search round the best; far away it may be only an upper bound.
+func nearest(p Piece, q vec.V2) (u, d float64) {
+	a := p.Image
+	const n = 24
+	k, best := 0, math.Inf(1)
+	step := (a.T1 - a.T0) / n
+	for i := range n + 1 {
+		if v := a.At(a.T0 + step*float64(i)).Dist(q); v < best {
+			k, best = i, v
+		}
+	}
+	lo, hi := max(a.T0, a.T0+step*float64(k-1)), min(a.T1, a.T0+step*float64(k+1))
+	for range 60 {
+		m := (lo + hi) / 2
+		if a.At(m).Sub(q).Dot(a.Deriv(m, 1)) > 0 {
+			hi = m
+		} else {
+			lo = m
+		}
+	}
+	u = (lo + hi) / 2
+	return u, min(best, a.At(u).Dist(q))
+}

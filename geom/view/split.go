@@ -1,0 +1,223 @@
+package view
+
+import (
+	"math"
+	"slices"
+
+	"epure/geom/curve"
+	"epure/geom/vec"
+)
+
+// piece is a part of a candidate between two stops.
+type piece struct {
+	cand    int
+	t0, t1  float64 // space parameters
+	layers  int
+	near    float64 // depth of its middle
+	group   int     // pieces of one group share an image; the lowest index of them
+	dropped bool
+}
+
+// pair is two candidates whose images lie on one curve.
+type pair struct{ i, j int }
+
+// drawing is one run of Lines or SplitBy.
+type drawing struct {
+	*scene
+	cands  []cand
+	active int // the candidates before this index are split and drawn, the others only split them
+	pairs  []pair
+	pieces []piece
+	first  []int // of pieces, by candidate, with one more at the end
+}
+
+// draw splits the first active candidates, decides each piece and joins what is alike.
+func (s *scene) draw(cands []cand, active int) []Piece {
+	d := &drawing{scene: s, cands: cands, active: active}
+	d.cross()
+	d.share()
+	d.cut()
+	d.decide()
+	d.merge()
+	return d.join()
+}
+
+// cross stops the active candidates where images meet.
+func (d *drawing) cross() {
+	boxes := make([]box, len(d.cands))
+	for i := range d.cands {
+		boxes[i] = d.cands[i].box.grown(d.cands[i].err)
+	}
+	where := newTree(boxes)
+	var found []int
+	for i := range d.cands[:d.active] {
+		found = where.find(found[:0], boxes[i])
+		slices.Sort(found) // an order that the bodies' places have no part in
+		for _, j := range found {
+			if j > i {
+				d.crossTwo(i, j)
+			}
+		}
+	}
+}
+
+// crossTwo stops the candidates i < j where their images meet, or takes note that they lie on one curve.
+func (d *drawing) crossTwo(i, j int) {
+	a, b := &d.cands[i], &d.cands[j]
+	if coincide(a, b) {
+		a.stopEnds(b)
+		b.stopEnds(a)
+		if j < d.active {
+			d.pairs = append(d.pairs, pair{i, j})
+		}
+		return
+	}
+	pts, _ := curve.Meet(a.image, b.image, a.err+b.err)
+	for _, x := range pts {
+		a.stopAt([]float64{a.space(x.TA)}, atCrossing)
+		b.stopAt([]float64{b.space(x.TB)}, atCrossing)
+	}
+}
+
+// stopEnds stops a at the ends of b, whose image lies on the same curve.
+func (a *cand) stopEnds(b *cand) {
+	for _, t := range [2]float64{b.t0, b.t1} {
+		if t, ok := a.locate(b, t); ok {
+			a.stopAt([]float64{t}, atCrossing)
+		}
+	}
+}
+
+// share gives candidates with one image the same stops, so that what is
+// merged later has the same ends on all of them.
+func (d *drawing) share() {
+	own := make([]int, len(d.cands))
+	for i := range d.cands {
+		own[i] = len(d.cands[i].stops)
+	}
+	for _, p := range d.pairs {
+		d.give(p.i, p.j, own[p.i])
+		d.give(p.j, p.i, own[p.j])
+	}
+}
+
+// give stops the candidate j at the first n stops of i.
+func (d *drawing) give(i, j, n int) {
+	a, b := &d.cands[i], &d.cands[j]
+	for _, s := range a.stops[:n] {
+		if t, ok := b.locate(a, s.t); ok {
+			b.stopAt([]float64{t}, atShared)
+		}
+	}
+}
+
+// sliver is the length of space under which a piece of c is taken into its
+// neighbour: two images that touch at a vanishing angle, each wrong by err, cross
+// as far as √(2·err·R) from where they should, R being the radius of curvature,
+// of the order of the size of the body or of the curve, whichever is larger.
+func (c *cand) sliver(size float64) float64 {
+	u, w := weightBounds(c.arc.Form, c.t0, c.t1)
+	r := max(size, float64(u*c.arc.U.Len())+float64(w*c.arc.W.Len()))
+	return 2 * math.Sqrt(c.err*r)
+}
+
+// sizeOf is the size of the candidate's body, mm; zero for a wire.
+func (d *drawing) sizeOf(c *cand) float64 {
+	if c.body == Wire {
+		return 0
+	}
+	return d.bodies[c.body].Size()
+}
+
+// cut makes the pieces of every active candidate.
+func (d *drawing) cut() {
+	for i := range d.cands[:d.active] {
+		c := &d.cands[i]
+		d.first = append(d.first, len(d.pieces))
+		ts := c.clean(c.sliver(d.sizeOf(c)))
+		for k := 1; k < len(ts); k++ {
+			d.pieces = append(d.pieces, piece{cand: i, t0: ts[k-1], t1: ts[k], group: len(d.pieces)})
+		}
+	}
+	d.first = append(d.first, len(d.pieces))
+}
+
+// clean returns the stops in order, each cluster within sliver mm replaced by
+// its most exact member; the ends always stay.
+func (c *cand) clean(sliver float64) []float64 {
+	slices.SortFunc(c.stops, func(a, b stop) int {
+		switch {
+		case a.t < b.t:
+			return -1
+		case a.t > b.t:
+			return 1
+		}
+		return int(a.rank) - int(b.rank)
+	})
+	kept := c.stops[:1]
+	var from vec.V3 // where the cluster begins
+	for k, s := range c.stops {
+		p := c.arc.At(s.t)
+		last := &kept[len(kept)-1]
+		switch {
+		case k == 0 || p.Dist(from) > sliver || s.t == c.t1 && last.t == c.t0:
+			from = p
+			if k > 0 {
+				kept = append(kept, s)
+			}
+		case s.rank < last.rank:
+			*last = s
+		}
+	}
+	ts := make([]float64, len(kept))
+	for k, s := range kept {
+		ts[k] = s.t
+	}
+	return ts
+}
+
+// decide sends a ray from the middle of every piece.
+func (d *drawing) decide() {
+	for k := range d.pieces {
+		p := &d.pieces[k]
+		c := &d.cands[p.cand]
+		m := c.arc.At((p.t0 + p.t1) / 2)
+		p.layers = d.covers(m, c.err)
+		p.near = d.f.Local(m).Z
+	}
+}
+
+// coincide tells whether the images of a and b lie on one curve where both
+// are: five points of one lie on the other, within the errors of both. Five
+// points make a conic.
+func coincide(a, b *cand) bool {
+	if (a.image.Form == curve.Line) != (b.image.Form == curve.Line) {
+		return false
+	}
+	return lies(a, b) || lies(b, a)
+}
+
+// probes is the number of points compared, less one.
+const probes = 4
+
+// lies tells whether the image of a lies on the unbounded curve of b's image.
+func lies(a, b *cand) bool {
+	w := unbounded(b.image)
+	for k := range probes + 1 {
+		p := a.image.At(a.image.T0 + (a.image.T1-a.image.T0)*float64(k)/probes)
+		if _, ok := w.Param(p, a.err+b.err); !ok {
+			return false
+		}
+	}
+	return true
+}
+
+// unbounded is the whole of the arc's curve.
+func unbounded(a curve.Arc2) curve.Arc2 {
+	if a.Form.Periodic() {
+		a.T1 = a.T0 + 2*math.Pi
+	} else {
+		a.T0, a.T1 = math.Inf(-1), math.Inf(1)
+	}
+	return a
+}
