@@ -69,6 +69,12 @@ func (f *Face) Ascent() float64 { return f.ascender / f.unitsPerEm }
 // Descent returns the room below the baseline, positive, over the font size.
 func (f *Face) Descent() float64 { return -f.descender / f.unitsPerEm }
 
+// Box returns the box that holds every glyph of the face, over the font size.
+func (f *Face) Box() drawing.Box {
+	at := func(x, y float64) vec.V2 { return vec.V2{X: x / f.unitsPerEm, Y: y / f.unitsPerEm} }
+	return drawing.Box{Min: at(f.xMin, f.yMin), Max: at(f.xMax, f.yMax)}
+}
+
 // Has reports whether the face has the character.
 func (f *Face) Has(r rune) bool { return f.glyph(r) != 0 }
 
