@@ -26,6 +26,7 @@ type cand struct {
 type stop struct {
 	t    float64
 	rank uint8
+	with *cand // the candidate whose image crosses or touches there, or nil
 }
 
 // The ranks of stops: where several fall together the most exact one stands for all.
@@ -53,7 +54,7 @@ func (s *scene) image(out []cand, e body.Edge, owner, index int) []cand {
 	z0, z1 := depths(e.Arc, s.f)
 	for _, k := range tracks(e.Arc, s.f, err) {
 		c := cand{track: k, arc: e.Arc, body: owner, index: index, a: e.A, b: e.B, err: err, box: boxOf(k.image), z0: z0, z1: z1}
-		c.stops = []stop{{k.t0, atEnd}, {k.t1, atEnd}}
+		c.stops = []stop{{t: k.t0, rank: atEnd}, {t: k.t1, rank: atEnd}}
 		s.meetBodies(&c)
 		out = append(out, c)
 	}
@@ -67,13 +68,13 @@ func (s *scene) image(out []cand, e body.Edge, owner, index int) []cand {
 func (s *scene) meetBodies(c *cand) {
 	for _, k := range s.at(c.box, c.z0, c.z1, c.err) {
 		for _, p := range s.contact[k] {
-			c.stopAt(c.part3().Cross(p.F.O, p.F.Z, c.err), atTurn)
+			c.stopAt(atTurn, nil, c.part3().Cross(p.F.O, p.F.Z, c.err)...)
 		}
 		if k == c.body {
 			continue
 		}
 		for _, face := range s.bodies[k].Faces {
-			c.stopAt(pierce(c.part3(), face.Surface, c.err), atTurn)
+			c.stopAt(atTurn, nil, pierce(c.part3(), face.Surface, c.err)...)
 		}
 	}
 }
@@ -82,10 +83,10 @@ func (s *scene) meetBodies(c *cand) {
 func (c *cand) part3() curve.Arc { return curve.Arc{Curve: c.arc.Curve, T0: c.t0, T1: c.t1} }
 
 // stopAt adds stops at those of the space parameters ts that lie within c.
-func (c *cand) stopAt(ts []float64, rank uint8) {
+func (c *cand) stopAt(rank uint8, with *cand, ts ...float64) {
 	for _, t := range ts {
 		if t > c.t0 && t < c.t1 {
-			c.stops = append(c.stops, stop{t, rank})
+			c.stops = append(c.stops, stop{t, rank, with})
 		}
 	}
 }

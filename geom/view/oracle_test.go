@@ -93,10 +93,9 @@ func (s solid) rim(d vec.V3, n int) []vec.V3 {
 	}
 	for k := range n {
 		theta := 2 * math.Pi * (float64(k) + 0.37) / float64(n)
-		for _, z := range [2]float64{0, s.h} {
-			if radius(z) > 0 {
-				keep(side(theta, z), -1)
-			}
+		keep(side(theta, 0), -1)
+		if s.r1 > 0 {
+			keep(side(theta, s.h), -1)
 		}
 		for i, c := range s.cuts { // the generator from base to top meets the cut
 			p, q := side(theta, 0), side(theta, s.h)

@@ -5,7 +5,6 @@ import (
 	"slices"
 
 	"epure/geom/curve"
-	"epure/geom/vec"
 )
 
 // piece is a part of a candidate between two stops.
@@ -74,8 +73,8 @@ func (d *drawing) crossTwo(i, j int) {
 	}
 	pts, _ := curve.Meet(a.image, b.image, a.err+b.err)
 	for _, x := range pts {
-		a.stopAt([]float64{a.space(x.TA)}, atCrossing)
-		b.stopAt([]float64{b.space(x.TB)}, atCrossing)
+		a.stopAt(atCrossing, b, a.space(x.TA))
+		b.stopAt(atCrossing, a, b.space(x.TB))
 	}
 }
 
@@ -83,7 +82,7 @@ func (d *drawing) crossTwo(i, j int) {
 func (a *cand) stopEnds(b *cand) {
 	for _, t := range [2]float64{b.t0, b.t1} {
 		if t, ok := a.locate(b, t); ok {
-			a.stopAt([]float64{t}, atCrossing)
+			a.stopAt(atCrossing, nil, t)
 		}
 	}
 }
@@ -106,19 +105,23 @@ func (d *drawing) give(i, j, n int) {
 	a, b := &d.cands[i], &d.cands[j]
 	for _, s := range a.stops[:n] {
 		if t, ok := b.locate(a, s.t); ok {
-			b.stopAt([]float64{t}, atShared)
+			b.stopAt(atShared, s.with, t)
 		}
 	}
 }
 
-// sliver is the length of space under which a piece of c is taken into its
-// neighbour: two images that touch at a vanishing angle, each wrong by err, cross
-// as far as √(2·err·R) from where they should, R being the radius of curvature,
-// of the order of the size of the body or of the curve, whichever is larger.
-func (c *cand) sliver(size float64) float64 {
+// blur is how far, in space, a crossing of images may lie from where it should.
+// Images that touch, each wrong by err, cross as far as √(2·err·R) from the point of contact, R
+// being the radius of curvature, of the order of the size of the body or of
+// the curve, whichever is larger. Two conics may touch as closely as the fourth order (all
+// curves of a cone do where a generator is seen end-on); then it is the fourth root of err·R³.
+type blur struct{ contact, closest float64 }
+
+func (c *cand) blur(size float64) blur {
 	u, w := weightBounds(c.arc.Form, c.t0, c.t1)
 	r := max(size, float64(u*c.arc.U.Len())+float64(w*c.arc.W.Len()))
-	return 2 * math.Sqrt(c.err*r)
+	second := math.Sqrt(c.err * r)
+	return blur{2 * second, 2 * math.Sqrt(second*r)}
 }
 
 // sizeOf is the size of the candidate's body, mm; zero for a wire.
@@ -134,7 +137,7 @@ func (d *drawing) cut() {
 	for i := range d.cands[:d.active] {
 		c := &d.cands[i]
 		d.first = append(d.first, len(d.pieces))
-		ts := c.clean(c.sliver(d.sizeOf(c)))
+		ts := c.clean(d.sizeOf(c))
 		for k := 1; k < len(ts); k++ {
 			d.pieces = append(d.pieces, piece{cand: i, t0: ts[k-1], t1: ts[k], group: len(d.pieces)})
 		}
@@ -142,10 +145,10 @@ func (d *drawing) cut() {
 	d.first = append(d.first, len(d.pieces))
 }
 
-// clean returns the stops in order, each cluster within sliver mm replaced by
-// its most exact member; the ends always stay.
-func (c *cand) clean(sliver float64) []float64 {
-	slices.SortFunc(c.stops, func(a, b stop) int {
+// clean returns the parameters of the stops in order. Of those that are one
+// place within the blur only the most exact is kept; the ends always stay.
+func (c *cand) clean(size float64) []float64 {
+	slices.SortStableFunc(c.stops, func(a, b stop) int {
 		switch {
 		case a.t < b.t:
 			return -1
@@ -154,17 +157,13 @@ func (c *cand) clean(sliver float64) []float64 {
 		}
 		return int(a.rank) - int(b.rank)
 	})
-	kept := c.stops[:1]
-	var from vec.V3 // where the cluster begins
-	for k, s := range c.stops {
-		p := c.arc.At(s.t)
+	blur := c.blur(size)
+	from, kept := c.stops[0], c.stops[:1] // from is where the cluster begins
+	for _, s := range c.stops[1:] {
 		last := &kept[len(kept)-1]
 		switch {
-		case k == 0 || p.Dist(from) > sliver || s.t == c.t1 && last.t == c.t0:
-			from = p
-			if k > 0 {
-				kept = append(kept, s)
-			}
+		case !c.together(from, s, blur) || s.t == c.t1 && last.t == c.t0:
+			from, kept = s, append(kept, s)
 		case s.rank < last.rank:
 			*last = s
 		}
@@ -174,6 +173,30 @@ func (c *cand) clean(sliver float64) []float64 {
 		ts[k] = s.t
 	}
 	return ts
+}
+
+// together tells whether two stops are one place: nearer than the blur of a contact, or within that of
+// the closest contact while c runs along a curve that it meets there.
+func (c *cand) together(a, b stop, blur blur) bool {
+	d := c.arc.At(a.t).Dist(c.arc.At(b.t))
+	if d <= blur.contact {
+		return true
+	}
+	return d <= blur.closest && (c.runsAlong(a.with, a.t, b.t) || c.runsAlong(b.with, a.t, b.t))
+}
+
+// runsAlong tells whether the image of c lies on that of o from t0 to t1.
+func (c *cand) runsAlong(o *cand, t0, t1 float64) bool {
+	if o == nil {
+		return false
+	}
+	w := unbounded(o.image)
+	for k := range probes + 1 {
+		if _, ok := w.Param(c.point(t0+(t1-t0)*float64(k)/probes), 2*(c.err+o.err)); !ok {
+			return false
+		}
+	}
+	return true
 }
 
 // decide sends a ray from the middle of every piece.

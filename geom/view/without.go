@@ -54,11 +54,11 @@ func (p Piece) outside(out []Piece, c *cand, others []*cand) []Piece {
 	if len(others) == 0 {
 		return append(out, p)
 	}
-	c.stops = []stop{{c.t0, atEnd}, {c.t1, atEnd}}
+	c.stops = []stop{{t: c.t0, rank: atEnd}, {t: c.t1, rank: atEnd}}
 	for _, o := range others {
 		c.stopEnds(o)
 	}
-	ts := c.clean(c.sliver(0))
+	ts := c.clean(0)
 	from := len(out)
 	for k := 1; k < len(ts); k++ {
 		if c.onAny(others, (ts[k-1]+ts[k])/2) {
