@@ -71,10 +71,11 @@ func (p *Pattern) wallLinks(phi float64, left, right []band) []link {
 		}
 	}
 	slices.Sort(ends)
+	tol := p.blur(phi, slices.Concat(left, right))
 	var up, down []link
 	for i := 1; i < len(ends); i++ {
 		lo, hi := ends[i-1], ends[i]
-		if hi-lo <= samePoint*p.size {
+		if hi-lo <= tol {
 			ends[i] = lo
 			continue
 		}
@@ -82,6 +83,7 @@ func (p *Pattern) wallLinks(phi float64, left, right []band) []link {
 		l, r := p.holds(left, phi, mid), p.holds(right, phi, mid)
 		face := p.wallFace(phi, mid)
 		switch {
+		case face == Seam && phi != 0 && phi != turn: // two edges meet, but for rounding
 		case l && !r:
 			up = append(up, link{none, face, node{phi, lo}, node{phi, hi}})
 		case r && !l:
@@ -90,6 +92,20 @@ func (p *Pattern) wallLinks(phi float64, left, right []band) []link {
 	}
 	slices.Reverse(down)
 	return append(up, down...)
+}
+
+// blur is the difference of u, mm, within which ends on the generator at phi
+// are one: samePoint, and what the rounding of the angle makes of a steep edge.
+func (p *Pattern) blur(phi float64, bands []band) float64 {
+	slope := 0.0
+	for _, b := range bands {
+		for _, j := range []int{b.lo, b.hi} {
+			if j != apex {
+				slope = max(slope, math.Abs(p.rims[j].derivs(phi, 1)[1]))
+			}
+		}
+	}
+	return samePoint*p.size + float64(slope*angleError)
 }
 
 // at tells whether the wall lies on the generator at phi in [0, turn].
@@ -157,7 +173,10 @@ func (p *Pattern) next(links []link, used []bool, l link) int {
 
 // meets tells whether c begins where l ends.
 func (p *Pattern) meets(l, c link) bool {
-	return c.from.phi == l.to.phi && math.Abs(c.from.u-l.to.u) <= samePoint*p.size
+	if c.from.phi != l.to.phi {
+		return false
+	}
+	return math.Abs(c.from.u-l.to.u) <= p.blur(l.to.phi, []band{{max(l.rim, apex), max(c.rim, apex)}})
 }
 
 // joins tells whether c is the same edge as l, in the same sense.

@@ -8,6 +8,7 @@ import (
 
 	"epure/geom/body"
 	"epure/geom/curve"
+	"epure/geom/num"
 	"epure/geom/surface"
 )
 
@@ -40,16 +41,18 @@ type band struct{ lo, hi int }
 // apex stands for the rim at u = 0.
 const apex = -1
 
-// sameAngle is the angle in radians under which two ends of edges are one
-// corner. The two edges of a corner are cut to length apart from each other;
-// with planes that cross under 1e-3 rad on the surface the rounding of the
-// position, some 1e-15, becomes 1e-12 along them. 1e-10 leaves two digits more
-// and is 1e-5 mm on a radius of 100 m.
+// sameAngle is the angle in radians under which something lies at the seam, at
+// a division or at a corner: 1e-10 is 1e-5 mm on a radius of 100 m, and a
+// thousand times angleError.
 const sameAngle = 1e-10
 
 // samePoint is the share of the body's size under which two ends along a
 // generator are one: sameAngle on an edge that runs at a slope of 100.
 const samePoint = 100 * sameAngle
+
+// angleError bounds the rounding of an angle of the order of a turn after some
+// frame changes and a root, radians: 64 units in the last place of 1.
+const angleError = num.Place
 
 // gather takes the edges round the face out of all edges of the body.
 func (p *Pattern) gather(edges []body.Edge) error {
@@ -93,13 +96,13 @@ func (r roll) wallOf(a curve.Arc, face int) wall {
 	phi, _ := r.coords(a.Mid())
 	_, lo := r.coords(a.Start())
 	_, hi := r.coords(a.End())
-	return wall{face, snap(phi), min(lo, hi), max(lo, hi)}
+	return wall{face, phi, min(lo, hi), max(lo, hi)}
 }
 
 // sweep returns the range of phi over an arc across the generators. phi is
 // monotone along it, since a plane meets a generator once.
 func (r roll) sweep(a curve.Arc) (from, to float64) {
-	if a.T1-a.T0 > turn-sameAngle {
+	if a.Form.Periodic() && a.T1-a.T0 > turn-sameAngle {
 		return 0, turn
 	}
 	t := (a.T0 + a.T1) / 2
@@ -109,20 +112,7 @@ func (r roll) sweep(a curve.Arc) (from, to float64) {
 	}
 	from, _ = r.coords(first)
 	end, _ := r.coords(last)
-	from = snap(from)
-	to = from + wrap(end-from)
-	if to > turn-sameAngle && to < turn+sameAngle {
-		to = turn
-	}
-	return from, to
-}
-
-// snap moves an angle next to the seam on to it.
-func snap(phi float64) float64 {
-	if phi < sameAngle || phi > turn-sameAngle {
-		return 0
-	}
-	return phi
+	return from, from + wrap(end-from)
 }
 
 // covers tells whether the rim has a point at phi in [0, turn].
@@ -130,26 +120,9 @@ func (m rim) covers(phi float64) bool {
 	return m.from <= phi && phi <= m.to || phi+turn <= m.to
 }
 
-// breaks returns 0, the angles in between at which edges begin, end or lie, and turn.
-func (p *Pattern) breaks() []float64 {
-	all := []float64{0}
-	for _, m := range p.rims {
-		all = append(all, wrap(m.from), wrap(m.to))
-	}
-	for _, w := range p.walls {
-		all = append(all, w.phi)
-	}
-	slices.Sort(all)
-	all = slices.CompactFunc(all, func(a, b float64) bool { return b-a < sameAngle })
-	for len(all) > 1 && all[len(all)-1] > turn-sameAngle {
-		all = all[:len(all)-1]
-	}
-	return append(all, turn)
-}
-
 // divide cuts the turn into panels and finds the material of each.
 func (p *Pattern) divide() error {
-	at := p.breaks()
+	at := p.settle()
 	for i := 1; i < len(at); i++ {
 		q := panel{a: at[i-1], b: at[i]}
 		mid := (q.a + q.b) / 2

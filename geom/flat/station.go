@@ -145,7 +145,7 @@ func (m rim) extremes() []float64 {
 	}
 	var in []float64
 	for _, t := range within(m.profile.turns(), from+sameAngle, to-sameAngle) {
-		in = append(in, snap(wrap(t)))
+		in = append(in, snap(wrap(t), sameAngle))
 	}
 	return in
 }
@@ -239,7 +239,7 @@ func between(hi, lo profile, q panel) []float64 {
 // TrueLength is the length inside the part of the generator at the angle theta
 // of the surface's frame, mm; zero where all is cut away.
 func (p *Pattern) TrueLength(theta float64) float64 {
-	phi := snap(wrap(theta - p.opts.Seam))
+	phi := snap(wrap(theta-p.opts.Seam), sameAngle)
 	s := p.at(phi)
 	if phi == 0 {
 		s = union(append(s, p.at(turn)...), samePoint*p.size)
