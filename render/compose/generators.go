@@ -1,0 +1,163 @@
+package compose
+
+import (
+	"math"
+	"sort"
+	"strings"
+
+	"epure/eval/scene"
+	"epure/geom/body"
+	"epure/geom/curve"
+	"epure/geom/surface"
+	"epure/geom/vec"
+	"epure/geom/view"
+	"epure/render/drawing"
+)
+
+// Generators on views: the even divisions of the curved faces, with the numbers
+// that they bear on the pattern of the same solid, so that a point can be
+// followed from the plan through the elevation on to the flat.
+
+// defaultDivisions is the number of generators of a solid that has no pattern
+// on the sheet: the workshop's twelve.
+const defaultDivisions = 12
+
+// division says which generators of a solid are drawn.
+type division struct {
+	face  int
+	seam  float64
+	count int
+}
+
+// divisionOf takes seam and divisions from the pattern of the solid, or of one
+// out of the same whole, on this sheet.
+func divisionOf(b *scene.Block, s *scene.Solid) division {
+	d := division{face: curvedFace(s.Body), count: defaultDivisions}
+	for _, exact := range []bool{true, false} {
+		for _, v := range b.Views {
+			for _, of := range v.Of {
+				dev, ok := of.Value.(*scene.Development)
+				if !ok || dev.Of == nil || exact && dev.Of != s || !exact && dev.Of.Whole != s.Whole {
+					continue
+				}
+				d.seam, d.count = dev.Seam, dev.Divisions
+				if dev.Pattern != nil && len(dev.Stations) > 0 {
+					d.seam = dev.Stations[0].Theta
+				}
+				return d
+			}
+		}
+	}
+	return d
+}
+
+// curvedFace is the index of the first ruled face, -1 when there is none.
+func curvedFace(b *body.Body) int {
+	for i, f := range b.Faces {
+		if _, ok := f.Surface.(surface.Ruled); ok {
+			return i
+		}
+	}
+	return -1
+}
+
+// generator is one piece of a generator in space.
+type generator struct {
+	number int
+	arc    curve.Arc
+}
+
+// generatorsOf lists the pieces of the even generators of a solid.
+func generatorsOf(s *scene.Solid, d division) []generator {
+	if d.face < 0 || d.count <= 0 {
+		return nil
+	}
+	ruled := s.Body.Faces[d.face].Surface.(surface.Ruled)
+	var out []generator
+	for i := range d.count {
+		theta := d.seam + 2*math.Pi*float64(i)/float64(d.count)
+		c := ruled.Ruling(theta).Curve()
+		for _, piece := range s.Body.Rulings(d.face, theta) {
+			out = append(out, generator{i + 1, curve.Arc{Curve: c, T0: piece.A, T1: piece.B}})
+		}
+	}
+	return out
+}
+
+// drawGenerators draws the generators of every solid of the view, and their
+// numbers when these are wanted.
+func (p *picture) drawGenerators(b *scene.Block) {
+	bodies := p.bodies()
+	lines := view.Lines(bodies, p.frame)
+	for _, s := range p.solids {
+		gens := generatorsOf(s.value, divisionOf(b, s.value))
+		for _, g := range gens {
+			pieces := view.Without(view.SplitBy([]curve.Arc{g.arc}, bodies, p.frame), lines)
+			for i, l := range pieces {
+				name := ordinal("generator", g.number)
+				if i > 0 {
+					name = ordinal(name, i+1)
+				}
+				stroke := p.draw(p.key(s.name, name), drawing.Generator, l.Image)
+				if !l.Visible {
+					stroke.pen = drawing.Group.Hidden
+				}
+			}
+			p.links = append(p.links, g.arc.Start(), g.arc.End())
+		}
+		if p.shows("numbers") {
+			p.numberGenerators(s, gens)
+		}
+	}
+}
+
+// numberGenerators writes the numbers at the wide ends, outward from the axis.
+// Ends that fall together on paper share one text: "3, 11".
+func (p *picture) numberGenerators(s solid, gens []generator) {
+	type end struct {
+		at   vec.V2
+		nums []int
+	}
+	var ends []end
+	size := s.value.Body.Size()
+next:
+	for _, g := range gens {
+		at := p.flatten(wideEnd(s.value, g.arc))
+		for i := range ends {
+			if ends[i].at.Dist(at) <= sameLine*size {
+				ends[i].nums = append(ends[i].nums, g.number)
+				continue next
+			}
+		}
+		ends = append(ends, end{at, []int{g.number}})
+	}
+	for _, e := range ends {
+		sort.Ints(e.nums)
+		var words []string
+		for _, n := range e.nums {
+			words = append(words, itoa(n))
+		}
+		p.tags = append(p.tags, tag{key: p.key(s.name, ordinal("number", e.nums[0])), at: e.at, away: p.outward(s.value, e.at), text: strings.Join(words, ", "), small: true})
+	}
+}
+
+// wideEnd is the end of a generator at the base: the one farther from the apex of
+// a cone, the one nearer the base of a cylinder.
+func wideEnd(s *scene.Solid, a curve.Arc) vec.V3 {
+	base := s.Root.Base
+	if math.Abs(base.Local(a.Start()).Z) < math.Abs(base.Local(a.End()).Z) {
+		return a.Start()
+	}
+	return a.End()
+}
+
+// outward is the direction on paper away from the solid at a point of its
+// base: away from the axis when it is seen end-on, else out of the base.
+func (p *picture) outward(s *scene.Solid, at vec.V2) vec.V2 {
+	axis := s.Root.Base.Z
+	down := vec.V2{X: 0 - axis.Dot(p.frame.X), Y: 0 - axis.Dot(p.frame.Y)}
+	if down.Len() > foldSine {
+		return down.Unit()
+	}
+	return at.Sub(p.flatten(s.Root.Base.O)).Unit()
+}

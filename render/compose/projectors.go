@@ -1,0 +1,55 @@
+package compose
+
+import (
+	"epure/geom/vec"
+	"epure/render/drawing"
+)
+
+// Projectors: thin lines from the points of a view to the same points of the
+// view that was folded from it.
+
+// projectors are the lines between the i-th draft and its parent, when they are
+// wanted and the view stands in projection at one scale with its parent.
+func (j *job) projectors(a *attempt, i int) []drawing.Mark {
+	p := a.drafts[i].p
+	if p.rel != folded || a.layout.items[i].parent < 0 || !(p.shows("projectors") || p.parent.shows("projectors")) {
+		return nil
+	}
+	up := a.layout.items[i].parent
+	d, e := a.drafts[i], a.drafts[up]
+	if d.scale != e.scale {
+		return nil
+	}
+	var out []drawing.Mark
+	across := p.toward.Left()
+	var done []float64
+	for _, q := range append(p.links[:len(p.links):len(p.links)], p.parent.links...) {
+		from := a.layout.items[up].at.Add(e.at(e.p.flatten(q)))
+		to := a.layout.items[i].at.Add(d.at(p.flatten(q)))
+		if drawn(done, from.Dot(across)) || from.Dist(to) == 0 {
+			continue
+		}
+		done = append(done, from.Dot(across))
+		out = append(out, drawing.Mark{Key: p.key("projectors", ordinal("projector", len(done))), Role: drawing.Projector,
+			Pen: j.ink.pens.Pen(drawing.Projector), Shape: drawing.Line{A: from, B: to}})
+	}
+	return out
+}
+
+// projectorsApart is the distance in mm on paper under which two projectors are
+// one line: a tenth of the narrow pen.
+const projectorsApart = 0.025
+
+func drawn(done []float64, at float64) bool {
+	for _, d := range done {
+		if d-at < projectorsApart && at-d < projectorsApart {
+			return true
+		}
+	}
+	return false
+}
+
+// onPaper is where a point of space lies on the sheet in the i-th view.
+func (a *attempt) onPaper(i int, q vec.V3) vec.V2 {
+	return a.layout.items[i].at.Add(a.drafts[i].at(a.drafts[i].p.flatten(q)))
+}
