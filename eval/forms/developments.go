@@ -67,14 +67,14 @@ func patternFunc(f func(d *scene.Development) Measured) MeasureFunc {
 	return func(v scene.Value, _ []scene.Value) (Measured, *Fail) { return f(v.(*scene.Development)), nil }
 }
 
-// ofCone lifts a function of the development of a cone.
-func ofCone(what string, f func(d *scene.Development) Measured) MeasureFunc {
+// ofCone lifts a measure that only the development of a cone has.
+func ofCone(what string, f func(p *flat.Pattern) (float64, bool), m func(x float64) Measured) MeasureFunc {
 	return func(v scene.Value, _ []scene.Value) (Measured, *Fail) {
-		d := v.(*scene.Development)
-		if d.Of.Root.Cylinder {
+		x, ok := f(v.(*scene.Development).Pattern)
+		if !ok {
 			return Measured{}, fail("no-such-measure", "", "the pattern of a cylinder has no %s", what)
 		}
-		return f(d), nil
+		return m(x), nil
 	}
 }
 
@@ -90,14 +90,14 @@ func developmentMeasures() map[string]MeasureFunc {
 			return Measured{length(d.Height()), scene.FlatLinear{A: lo, B: vec.V2{X: lo.X, Y: hi.Y}}}
 		}),
 		"cut_length": patternFunc(func(d *scene.Development) Measured { return Measured{Value: length(d.CutLength())} }),
-		"sector": ofCone("sector", func(d *scene.Development) Measured {
-			return Measured{degrees(d.Sector()), scene.FlatAngle{From: 0, To: d.Sector()}}
+		"sector": ofCone("sector", (*flat.Pattern).Sector, func(x float64) Measured {
+			return Measured{degrees(x), scene.FlatAngle{From: 0, To: x}}
 		}),
-		"outer_radius": ofCone("outer radius", func(d *scene.Development) Measured {
-			return Measured{length(d.OuterRadius()), scene.FlatRadius{R: d.OuterRadius()}}
+		"outer_radius": ofCone("outer radius", (*flat.Pattern).OuterRadius, func(x float64) Measured {
+			return Measured{length(x), scene.FlatRadius{R: x}}
 		}),
-		"inner_radius": ofCone("inner radius", func(d *scene.Development) Measured {
-			return Measured{length(d.InnerRadius()), scene.FlatRadius{R: d.InnerRadius()}}
+		"inner_radius": ofCone("inner radius", (*flat.Pattern).InnerRadius, func(x float64) Measured {
+			return Measured{length(x), scene.FlatRadius{R: x}}
 		}),
 		"girth": patternFunc(func(d *scene.Development) Measured { return Measured{Value: length(d.Girth())} }),
 		"stepped_girth": patternFunc(func(d *scene.Development) Measured {
@@ -107,7 +107,7 @@ func developmentMeasures() map[string]MeasureFunc {
 			return Measured{Value: length(d.Girth() - d.SteppedGirth(d.Divisions))}
 		}),
 		"deviation":   patternFunc(func(d *scene.Development) Measured { return Measured{Value: length(d.Deviation())} }),
-		"count":       patternFunc(func(d *scene.Development) Measured { return Measured{Value: number(float64(d.Count()))} }),
+		"count":       patternFunc(func(d *scene.Development) Measured { return Measured{Value: number(float64(len(d.Loops)))} }),
 		"true_length": trueLength,
 		"flat": func(v scene.Value, args []scene.Value) (Measured, *Fail) {
 			d, p := v.(*scene.Development), args[0].(scene.Triple).V
@@ -129,10 +129,11 @@ func trueLength(v scene.Value, args []scene.Value) (Measured, *Fail) {
 	if n != math.Trunc(n) || n < 1 || int(n) > d.Divisions {
 		return Measured{}, fail("out-of-range", "", "%s has the divisions 1 to %d", d.Name, d.Divisions).because("%s was asked for", show(q))
 	}
-	m := Measured{Value: length(d.TrueLengthAt(int(n)))}
+	x, _ := d.TrueLengthAt(int(n))
+	m := Measured{Value: length(x)}
 	for _, s := range d.Stations {
-		if s.Number == int(n) {
-			m.Anchor = scene.FlatLinear{A: s.Low, B: s.High}
+		if s.Number == int(n) && len(s.Spans) > 0 {
+			m.Anchor = scene.FlatLinear{A: s.Spans[0].Low, B: s.Spans[len(s.Spans)-1].High}
 			break
 		}
 	}

@@ -107,11 +107,12 @@ type Note struct {
 
 // Table lists measures: for a development the true lengths of its stations, for other things their measures.
 type Table struct {
-	Name string
-	Span source.Span
-	Of   []Subject
-	Rows [][]string // first row the header; filled by evaluation
-	At   *vec.V2
+	Name  string
+	Span  source.Span
+	Title string
+	Of    []Subject
+	Rows  [][]string // first row the header
+	At    *vec.V2
 }
 
 // Titles fills the title block (ISO 7200). Empty fields stay empty.
