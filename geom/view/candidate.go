@@ -1,8 +1,6 @@
 package view
 
 import (
-	"math"
-
 	"epure/geom/body"
 	"epure/geom/curve"
 	"epure/geom/surface"
@@ -74,7 +72,7 @@ func (s *scene) meetBodies(c *cand) {
 			continue
 		}
 		for _, face := range s.bodies[k].Faces {
-			c.stopAt(atTurn, nil, pierce(c.part3(), face.Surface, c.err)...)
+			c.stopAt(atTurn, nil, surface.Cross(face.Surface, c.part3(), c.err)...)
 		}
 	}
 }
@@ -115,41 +113,4 @@ func contactPlanes(b *body.Body, d vec.V3) []surface.Plane {
 func (c *cand) locate(o *cand, t float64) (float64, bool) {
 	s, ok := c.image.Param(o.point(t), 2*(c.err+o.err))
 	return c.space(s), ok
-}
-
-// pierce is where the arc meets the surface of another body; gap is the rounding error, mm.
-func pierce(a curve.Arc, s surface.Surface, gap float64) []float64 {
-	if p, ok := s.(surface.Plane); ok {
-		return a.Cross(p.F.O, p.F.Z, gap)
-	}
-	if a.Form == curve.Line {
-		return s.Roots(a.C, a.U)
-	}
-	t, ok := s.(surface.Traced)
-	if !ok {
-		return nil
-	}
-	f := vec.PlaneFrame(a.C, a.U.Cross(a.W))
-	var ts []float64
-	for _, c := range t.Trace(surface.Plane{F: f}, gap).Curves() {
-		pts, _ := curve.Meet(a.Project(f), whole(c.Project(f), reachOf(a)), gap)
-		for _, x := range pts {
-			ts = append(ts, x.TA)
-		}
-	}
-	return ts
-}
-
-// whole is the part of a curve, with its vectors square to each other, within r of the origin at least.
-func whole(c curve.Curve2, r float64) curve.Arc2 {
-	r += c.C.Len()
-	switch c.Form {
-	case curve.Ellipse, curve.EllipseEnd:
-		return curve.Arc2{Curve2: c, T0: -math.Pi, T1: math.Pi}
-	case curve.Hyperbola, curve.HyperbolaEnd:
-		t := math.Asinh(r / c.W.Len())
-		return curve.Arc2{Curve2: c, T0: -t, T1: t}
-	}
-	t := r / c.U.Len()
-	return curve.Arc2{Curve2: c, T0: -t, T1: t}
 }

@@ -32,6 +32,10 @@ func (s solid) value(p vec.V3) float64 {
 // cover is how deep the ray from p along d runs in the solid: the least value on it. A convex function
 // on a line is searched by golden section.
 func (s solid) cover(p, d vec.V3) float64 {
+	m := s.f.Point(vec.V3{Z: s.h / 2})
+	if miss := m.Sub(p).Cross(d).Len() - math.Hypot(s.h/2, max(s.r0, s.r1)); miss > 0 {
+		return miss
+	}
 	at := func(t float64) float64 { return s.value(p.Along(d, t)) }
 	// everything of the solid lies within this of p
 	far := p.Dist(s.f.O) + s.h + s.r0 + s.r1
@@ -73,8 +77,7 @@ func (s solid) body() (*body.Body, bool) {
 	return b, true
 }
 
-// rim is the points of the edges and contours of the solid for sight along d, n on each curve,
-// and for each whether the boundary there is as sharp as an edge. They are worked
+// rim is the points of the edges and contours of the solid for sight along d, n on each curve. They are worked
 // out from generators, circles and lines, not from conics.
 func (s solid) rim(d vec.V3, n int) []vec.V3 {
 	var out []vec.V3

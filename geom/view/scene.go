@@ -62,16 +62,16 @@ func (s *scene) at(b box, lo, hi, e float64) []int {
 }
 
 // covers counts the layers of material between p and the viewer, e being the
-// error of p. What lies before p of an interval counts when its middle is
-// inside by more than the body's bound for a point on its surface, which is
-// some hundred times the error of a point of an edge.
+// error of p, mm. What lies before p of an interval counts when its middle is
+// deeper than the body's bound for a point on its surface and the error of p together.
 func (s *scene) covers(p vec.V3, e float64) int {
 	q := s.f.Local(p)
 	n := 0
 	for _, k := range s.at(box{vec.V2{X: q.X, Y: q.Y}, vec.V2{X: q.X, Y: q.Y}}, q.Z, math.Inf(1), e) {
-		for _, v := range s.bodies[k].Intervals(p, s.f.Z) {
+		b := s.bodies[k]
+		for _, v := range b.Intervals(p, s.f.Z) {
 			a := max(v.A, 0)
-			if v.B > a && s.bodies[k].Side(p.Along(s.f.Z, (a+v.B)/2)) == num.Negative {
+			if v.B > a && b.Depth(p.Along(s.f.Z, (a+v.B)/2)) < -float64(num.OnSurface*b.Size())-2*e {
 				n++
 			}
 		}

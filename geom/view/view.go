@@ -73,11 +73,3 @@ func SplitBy(arcs []curve.Arc, bodies []*body.Body, f vec.Frame) []Piece {
 	}
 	return s.draw(append(wires, s.candidates()...), len(wires))
 }
-
-// Seen tells whether nothing lies between the point p of space and the viewer.
-// A point on a surface that faces the viewer is seen.
-func Seen(bodies []*body.Body, f vec.Frame, p vec.V3) bool {
-	s := newScene(bodies, f)
-	s.grow(p)
-	return s.covers(p, s.err) == 0
-}
