@@ -168,13 +168,33 @@ func digitRun(text string) int {
 	return n
 }
 
-// blanks returns how many blanks follow position i.
+// blanks returns how many bytes of blanks follow position i.
 func (s *scanner) blanks(i int) int {
 	n := 0
-	for i+n < len(s.text) && (s.text[i+n] == ' ' || s.text[i+n] == '\t') {
-		n++
+	for i+n < len(s.text) {
+		size := blank(s.text[i+n:])
+		if size == 0 {
+			break
+		}
+		n += size
 	}
 	return n
+}
+
+// blank returns the length of the blank that text begins with, 0 for none. The
+// blanks that do not break a line are common between a number and its unit.
+func blank(text string) int {
+	if text[0] == ' ' || text[0] == '\t' {
+		return 1
+	}
+	if text[0] < utf8.RuneSelf {
+		return 0
+	}
+	r, size := utf8.DecodeRuneInString(text)
+	if unicode.Is(unicode.Zs, r) {
+		return size
+	}
+	return 0
 }
 
 // maxFigures and maxExponent bound a number: more figures than anybody means,
