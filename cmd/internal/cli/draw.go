@@ -1,0 +1,102 @@
+package cli
+
+import (
+	"encoding/json"
+
+	"epure/cmd/internal/build"
+	"epure/lang/diag"
+	"epure/lang/source"
+)
+
+// draw writes the output blocks of the files. A file with an error or a verify
+// that fails writes nothing, and what it wrote before stays as it was.
+func (s *session) draw() (int, error) {
+	units, err := s.load()
+	if err != nil {
+		return Usage, err
+	}
+	status, written, err := s.drawUnits(units)
+	if err != nil || status == Failed {
+		return status, err
+	}
+	s.say("%s", written)
+	return status, nil
+}
+
+// drawUnits draws loaded units and returns the status and a line that sums up.
+func (s *session) drawUnits(units []*build.Unit) (status int, sum string, err error) {
+	s.run(units, build.Job{Compose: true, Formats: s.call.Formats})
+	namesake(units)
+	status, err = s.report(units, s.words)
+	if err != nil || status == Failed {
+		return status, "", err
+	}
+	drawings, written, kept := 0, 0, 0
+	for _, u := range units {
+		if u.Failed() {
+			continue
+		}
+		outcomes, err := build.Put(s.Disk, s.call.Folder, u.Artefacts)
+		if err != nil {
+			return Failed, "", err
+		}
+		drawings += len(u.Sheets)
+		for _, o := range outcomes {
+			if o.Changed {
+				written++
+			} else {
+				kept++
+			}
+			if err := s.announce(u, o); err != nil {
+				return Failed, "", writing(err)
+			}
+		}
+	}
+	return status, sums(units, drawings, written, kept), nil
+}
+
+// sums is the line at the end.
+func sums(units []*build.Unit, drawings, written, kept int) string {
+	text := count(drawings, "drawing") + ": " + count(written, "file") + " written"
+	if kept > 0 {
+		text += ", " + count(kept, "file") + " unchanged"
+	}
+	failed := 0
+	for _, u := range units {
+		if u.Failed() {
+			failed++
+		}
+	}
+	if failed > 0 {
+		text += "; nothing drawn of " + count(failed, "file") + " with errors"
+	}
+	return text
+}
+
+// announce prints the name of an output that is now up to date.
+func (s *session) announce(u *build.Unit, o build.Outcome) error {
+	if s.call.JSON {
+		return json.NewEncoder(s.data).Encode(object{{"file", u.Name}, {"output", o.Path}, {"changed", o.Changed}})
+	}
+	_, err := s.data.WriteString(o.Path + "\n")
+	return err
+}
+
+// namesake reports two drawings whose files would have one name: the second
+// would silently replace the first. Capitals do not tell names apart on every disk.
+func namesake(units []*build.Unit) {
+	first := map[string]source.Span{}
+	for _, u := range units {
+		for _, sheet := range u.Sheets {
+			name := build.FoldName(sheet.Name)
+			at, taken := first[name]
+			if !taken {
+				first[name] = sheet.At
+				continue
+			}
+			u.Bag.Add(diag.New("same-output", sheet.At, "two drawings are named "+source.Quote(sheet.Name)).
+				Because("the name of a drawing begins the name of its file, and the second would replace the first").
+				WithNote(at, "the first one is here"))
+		}
+	}
+}
