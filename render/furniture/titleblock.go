@@ -38,7 +38,7 @@ type TitleBlock struct {
 // BlockHeight its height, which the standard leaves free.
 const (
 	BlockWidth  = 180.0
-	BlockHeight = 36.0
+	BlockHeight = 37.0
 )
 
 // BlockBox returns where the title block lies on a paper: the lower right corner
@@ -61,12 +61,12 @@ type field struct {
 // is in the middle, and at the right what it is filed by.
 func (b TitleBlock) fields() []field {
 	return []field{
-		{0, 28, 46, 8, "Responsible department", b.Department, 2.5},
-		{46, 28, 40, 8, "Technical reference", b.Reference, 2.5},
-		{86, 28, 36, 8, "General tolerance", b.Tolerance, 2.5},
-		{122, 28, 20, 8, "Scale", b.Scale, 3.5},
-		{142, 28, 12, 8, "Units", b.Units, 3.5},
-		{154, 28, 26, 8, "", "", 0},
+		{0, 28, 46, 9, "Responsible department", b.Department, 2.5},
+		{46, 28, 40, 9, "Technical reference", b.Reference, 2.5},
+		{86, 28, 36, 9, "General tolerance", b.Tolerance, 2.5},
+		{122, 28, 20, 9, "Scale", b.Scale, 3.5},
+		{142, 28, 12, 9, "Units", b.Units, 3.5},
+		{154, 28, 26, 9, "", "", 0},
 		{0, 20, 46, 8, "Created by", b.Creator, 2.5},
 		{46, 20, 40, 8, "Approved by", b.Approved, 2.5},
 		{86, 20, 50, 8, "Document type", b.DocumentType, 2.5},
@@ -99,6 +99,7 @@ func (b TitleBlock) sheet() string {
 const (
 	captionHeight = 1.8
 	inset         = 0.9
+	footing       = 1.65 // of the last baseline above the field's foot: tails of 5 mm text, 3/10 h, stay inside
 )
 
 // Marks returns the title block with its lower right corner at corner.
@@ -109,8 +110,8 @@ func (b TitleBlock) Marks(corner vec.V2, g drawing.Group) []drawing.Mark {
 		out = append(out, f.marks(o, g)...)
 	}
 	out = append(out, b.title(o, g)...)
-	at := vec.V2{X: o.X + 167, Y: o.Y + 32}
-	return append(out, Symbol(b.Projection, at, 2.6, g)...)
+	at := vec.V2{X: o.X + 167, Y: o.Y + 32.5}
+	return append(out, Symbol(b.Projection, at, 2.8, g)...)
 }
 
 // border is the block's own outline, as wide as the frame that it leans on.
@@ -128,15 +129,10 @@ func (f field) marks(o vec.V2, g drawing.Group) []drawing.Mark {
 	out := []drawing.Mark{{Key: named(k.Thing, strings.TrimSpace(k.Feature+" field")), Role: drawing.Furniture,
 		Pen: drawing.Pen{Width: g.Narrow, Type: drawing.Continuous}, Shape: drawing.BoxAt(p, f.w, f.h).Outline()}}
 	out = append(out, caption(k, f.name, p, f.h)...)
-	room := f.h - captionHeight - 3*inset - tailRoom*f.most
-	lines, h := Fit(f.text, f.w-2*inset, room, f.most)
-	base := p.Y + inset + tailRoom*f.most + pitch*h*float64(len(lines)-1)
+	lines, h := Fit(f.text, f.w-2*inset, f.h-captionHeight-2*inset-footing, f.most)
+	base := p.Y + footing + pitch*h*float64(len(lines)-1)
 	return append(out, column(k, lines, vec.V2{X: p.X + inset, Y: base}, h, drawing.Start)...)
 }
-
-// tailRoom is the room for tails below the baseline, over the height of capitals:
-// c3 = 3/10 h of ISO 3098, type B.
-const tailRoom = 0.3
 
 func caption(k drawing.Key, name string, p vec.V2, h float64) []drawing.Mark {
 	if name == "" {
