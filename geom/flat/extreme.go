@@ -7,8 +7,8 @@ import (
 	"epure/geom/curve"
 )
 
-// extremes returns parameters strictly inside the piece that contain all at
-// which x or y of the path is extreme.
+// extremes returns parameters of the piece, among them all inside it at which x
+// or y of the path is extreme.
 func (p Piece) extremes() []float64 {
 	a, b := min(p.T0, p.T1), max(p.T0, p.T1)
 	switch q := p.Path.(type) {
@@ -24,7 +24,7 @@ func (p Piece) extremes() []float64 {
 	return nil
 }
 
-// extremes returns the parameters in (a, b) at which x or y is extreme.
+// extremes returns parameters in [a, b], among them all at which x or y is extreme.
 //
 // With the polar angle r·t, x = cos(r·t)/w has its extremes at the roots of
 // h = w'·cos(r·t) + r·w·sin(r·t), and since h' = (w" + r²w)·cos(r·t), h is
@@ -47,7 +47,7 @@ func (p Polar) extremes(a, b float64) []float64 {
 		cuts = append(cuts, min(b, max(a, q*(math.Pi/2)/r)))
 	}
 	slices.Sort(cuts)
-	var out []float64
+	out := slices.Clone(cuts) // a root at a cut may be lost to rounding on both its sides
 	for i := 1; i < len(cuts); i++ {
 		for _, f := range []func(float64) float64{h, g} {
 			if t, ok := bracket(f, cuts[i-1], cuts[i]); ok {

@@ -117,19 +117,42 @@ func (p *Pattern) Flat(q vec.V3) (vec.V2, error) {
 	if off > onFace*p.size {
 		return vec.V2{}, &OffError{Distance: off}
 	}
-	if phi > turn-sameAngle {
-		phi = 0
+	if p.roll.cone && u <= onFace*p.size {
+		return p.apexFlat(u)
 	}
-	gap := beyond(p.at(phi), u)
-	if phi == 0 {
-		if other := beyond(p.at(turn), u); other < gap {
-			phi, gap = turn, other
+	where, miss := p.nearest(snap(phi, sameAngle), u)
+	if miss > onFace*p.size {
+		return vec.V2{}, &OffError{Distance: miss, OnSurface: true}
+	}
+	return p.roll.flat(where, u), nil
+}
+
+// nearest is the angle in the material next to (phi, u), and the distance on
+// the surface from there to the material, mm; +Inf where there is none.
+func (p *Pattern) nearest(phi, u float64) (where, miss float64) {
+	miss = math.Inf(1)
+	for _, q := range p.panels {
+		for _, at := range []float64{phi, phi + turn, phi - turn} {
+			in := min(max(at, q.a), q.b)
+			round := p.roll.radius(u) * math.Abs(at-in)
+			for _, b := range q.spans {
+				up := max(0, p.u(b.lo, in)-u, u-p.u(b.hi, in))
+				if d := math.Hypot(round, up); d < miss {
+					where, miss = in, d
+				}
+			}
 		}
 	}
-	if gap > onFace*p.size {
-		return vec.V2{}, &OffError{Distance: gap, OnSurface: true}
+	return where, miss
+}
+
+// apexFlat is Flat for a cone's apex, through which all generators go.
+func (p *Pattern) apexFlat(u float64) (vec.V2, error) {
+	inner, _ := p.InnerRadius()
+	if inner-u > onFace*p.size {
+		return vec.V2{}, &OffError{Distance: inner - u, OnSurface: true}
 	}
-	return p.roll.flat(phi, u), nil
+	return vec.V2{}, nil
 }
 
 // onFace is how far off the face, as a share of the body's size, a point may
@@ -141,30 +164,18 @@ const onFace = 1e-9
 // OffError says that a point does not lie on the face.
 type OffError struct {
 	// Distance is how far it is from the surface, mm; or, when it lies on the
-	// surface but beyond the edges, how far along the generator (+Inf when the
-	// generator has nothing in the part).
+	// surface but beyond the edges, how far from the face, measured round the
+	// axis and along the generator.
 	Distance  float64
 	OnSurface bool
 }
 
 // Error gives the distance.
 func (e *OffError) Error() string {
-	switch {
-	case math.IsInf(e.Distance, 1):
-		return "the point lies on a generator that was cut away whole"
-	case e.OnSurface:
+	if e.OnSurface {
 		return fmt.Sprintf("the point lies %.6g mm beyond the edge of the face", e.Distance)
 	}
 	return fmt.Sprintf("the point lies %.6g mm off the face", e.Distance)
-}
-
-// beyond is the distance from u to the nearest of the spans.
-func beyond(spans []Span, u float64) float64 {
-	best := math.Inf(1)
-	for _, s := range spans {
-		best = min(best, max(0, s.Lo-u, u-s.Hi))
-	}
-	return best
 }
 
 // Fold returns the point of space at which the point q of the pattern comes to

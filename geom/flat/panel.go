@@ -136,7 +136,7 @@ func (p *Pattern) divide() error {
 			}
 		}
 		slices.SortStableFunc(cross, func(a, b int) int {
-			return cmp.Compare(p.u(a, mid), p.u(b, mid))
+			return cmp.Compare(p.order(a, q), p.order(b, q))
 		})
 		if p.roll.cone && len(cross)%2 == 1 {
 			cross = cross[1:] // an even number of edges: the apex is not in the part
@@ -151,6 +151,13 @@ func (p *Pattern) divide() error {
 		p.panels = append(p.panels, q)
 	}
 	return nil
+}
+
+// order is what the rims of a panel are sorted by. They may touch in it but
+// not cross, so the sum of u at two places puts them in order.
+func (p *Pattern) order(j int, q panel) float64 {
+	d := (q.b - q.a) / 3
+	return p.u(j, q.a+d) + p.u(j, q.b-d)
 }
 
 // u returns u on the rim j, or 0 for the apex.

@@ -53,7 +53,7 @@ type Polar struct {
 func (p Polar) At(t float64) vec.V2 {
 	s, c := math.Sincos(p.rate * t)
 	u := p.u(t)
-	return vec.V2{X: u * c, Y: float64(p.hand*float64(u*s)) + 0}
+	return vec.V2{X: float64(u*c) + 0, Y: float64(p.hand*float64(u*s)) + 0}
 }
 
 // Deriv returns the n-th derivative at t: the rule of the product on u(t)

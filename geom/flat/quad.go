@@ -12,17 +12,21 @@ func integral(f func(float64) float64, a, b float64) float64 {
 	}
 	whole, size := gauss(f, a, b)
 	q := quadrature{f, size / (b - a), leaves}
-	return q.halves(a, b, whole, 0)
+	return q.halves(a, b, whole, math.Inf(1), 0)
 }
 
 // agree is the share to which the rule and its halves must agree, of what lies
-// under the stretch or of its share of the whole, whichever is more: fifty
-// units in the last place. The error of the halves is by then some 2^-32 of that.
-const agree = 1e-14
+// under the stretch or of its share of the whole, whichever is more. Halving
+// divides the error of a 16-point rule by 2^32 once it converges at all, so
+// that halves which agree to 1e-11 err by far less than rounding.
+const agree = 1e-11
 
-// depth and leaves bound the halving where the rounding of f itself keeps the
-// rules from agreeing (an edge that runs nearly to infinity): a turn halved 24
-// times is 4e-7 rad.
+// stalled is the share under which a rule that halving no longer mends, not even
+// by a quarter, shows the rounding of f itself (an edge that runs nearly to
+// infinity) and not its shape.
+const stalled = 1e-9
+
+// depth and leaves bound the halving whatever f is: a turn halved 24 times is 4e-7 rad.
 const (
 	depth  = 24
 	leaves = 1 << 12
@@ -35,15 +39,19 @@ type quadrature struct {
 	left int
 }
 
-func (q *quadrature) halves(a, b, whole float64, level int) float64 {
+// halves integrates over [a, b], where the rule gave whole; last is the share
+// by which the level above disagreed.
+func (q *quadrature) halves(a, b, whole, last float64, level int) float64 {
 	m := (a + b) / 2
 	l, sl := gauss(q.f, a, m)
 	r, sr := gauss(q.f, m, b)
 	q.left--
-	if math.Abs(l+r-whole) <= agree*max(sl+sr, q.mean*(b-a)) || level == depth || q.left <= 0 {
+	off := math.Abs(l+r-whole) / max(sl+sr, q.mean*(b-a))
+	switch {
+	case !(off > agree), off <= stalled && off > last/4, level == depth, q.left <= 0:
 		return l + r
 	}
-	return q.halves(a, m, l, level+1) + q.halves(m, b, r, level+1)
+	return q.halves(a, m, l, off, level+1) + q.halves(m, b, r, off, level+1)
 }
 
 // gauss returns the Gauss-Legendre rule with 16 points for f and for |f|; nodes and weights are the

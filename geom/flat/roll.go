@@ -50,7 +50,7 @@ func (r roll) flat(phi, u float64) vec.V2 {
 		return vec.V2{X: float64(r.hand*float64(r.r*phi)) + 0, Y: u}
 	}
 	s, c := math.Sincos(r.sin * phi)
-	return vec.V2{X: u * c, Y: float64(r.hand*float64(u*s)) + 0}
+	return vec.V2{X: float64(u*c) + 0, Y: float64(r.hand*float64(u*s)) + 0}
 }
 
 // unflat is the inverse of flat. The gap of a cone's pattern is shared out

@@ -182,10 +182,9 @@ func (p *Pattern) longest() []reason {
 	return out
 }
 
-// tie is the share by which two lengths may differ that are equally long: the
-// rounding of a length, some 1e-15, with room for a plane's normal that was
-// worked out from a slope.
-const tie = 1e-12
+// tie is the share by which two lengths may differ that are equally long: what
+// `verify` allows two equal lengths to differ by.
+const tie = 1e-9
 
 // scan is the number of parts in which a stretch without a turn of either of
 // two edges is searched for a change of sign. On a cylinder the difference of
@@ -223,7 +222,7 @@ func between(hi, lo profile, q panel) []float64 {
 	cuts = append(cuts, q.a, q.b)
 	slices.Sort(cuts)
 	slope := func(phi float64) float64 { return hi.derivs(phi, 1)[1] - lo.derivs(phi, 1)[1] }
-	var at []float64
+	at := slices.Clone(cuts) // a root at a cut may be lost to rounding on both its sides
 	for i := 1; i < len(cuts); i++ {
 		step := (cuts[i] - cuts[i-1]) / scan
 		for k := range scan {
