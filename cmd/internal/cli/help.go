@@ -65,7 +65,7 @@ func optionHelp(b *strings.Builder, verb string) {
 func exitHelp(b *strings.Builder) {
 	b.WriteString("\nExit status\n")
 	var rows [][2]string
-	for _, e := range manual.ExitStatuses {
+	for _, e := range manual.ExitStatuses() {
 		rows = append(rows, [2]string{fmt.Sprint(e.Status), e.Help})
 	}
 	columns(b, rows)
