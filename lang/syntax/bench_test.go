@@ -53,10 +53,10 @@ func BenchmarkParse(b *testing.B) {
 
 func BenchmarkLex(b *testing.B) {
 	text := strings.Repeat(hood, (1<<20)/len(hood)+1)
-	r := &reporter{file: source.New("big.epure", []byte(text))}
+	r := &reporter{file: source.New("big.epure", []byte(text)), src: text}
 	b.SetBytes(int64(len(text)))
 	for b.Loop() {
-		lex(r, text, 0, len(text))
+		lex(r, 0, len(text))
 	}
 }
 

@@ -106,24 +106,36 @@ type rowHole struct {
 	Nearest *rowExpr `parser:"( 'nearest' @@ )?"`
 }
 
-// grammar holds the parsers of the three things that are parsed alone.
+// rowAny is the root of the grammar: the three things that are parsed alone.
+type rowAny struct {
+	Line *rowLine `parser:"  @@"`
+	Hole *rowHole `parser:"| @@"`
+	Expr *rowExpr `parser:"| @@"`
+}
+
+// grammar holds the parsers of the three.
 type grammar struct {
 	line *participle.Parser[rowLine]
 	hole *participle.Parser[rowHole]
 	expr *participle.Parser[rowExpr]
 }
 
-// theGrammar makes the parsers at the first use: reading the grammar takes some
-// hundred microseconds, and they never change.
+// theGrammar makes the parsers at the first use, since that takes a millisecond;
+// they never change.
 var theGrammar = sync.OnceValue(newGrammar)
 
 func newGrammar() grammar {
-	options := []participle.Option{participle.Lexer(symbols{}), participle.UseLookahead(0)}
-	return grammar{
-		line: participle.MustBuild[rowLine](options...),
-		hole: participle.MustBuild[rowHole](options...),
-		expr: participle.MustBuild[rowExpr](options...),
+	all := participle.MustBuild[rowAny](participle.Lexer(symbols{}), participle.UseLookahead(0))
+	return grammar{line: production[rowLine](all), hole: production[rowHole](all), expr: production[rowExpr](all)}
+}
+
+// production returns the parser of one of the fields of rowAny, which has it.
+func production[T any](all *participle.Parser[rowAny]) *participle.Parser[T] {
+	p, err := participle.ParserForProduction[T](all)
+	if err != nil {
+		panic(err)
 	}
+	return p
 }
 
 // symbols tells participle the names of the kinds of tokens. It does not lex:

@@ -13,7 +13,8 @@ const maxBlocks = 32
 // layout builds the statements of a file.
 type layout struct {
 	*parser
-	stack []*block // the blocks that are open; the first is the file
+	stack   []*block // the blocks that are open; the first is the file
+	skipped int      // open blocks that are too deep to be kept
 }
 
 // block is an open block.
@@ -147,10 +148,10 @@ func (l *layout) deeper(i, j int) (missing bool) {
 			WithLabelledFix(l.span(last.end, last.end), " {", "write `{` at the end of this line"))
 		return true
 	}
-	number, _ := l.file.Source.Position(last.start)
+	number, _ := l.parser.file.Source.Position(last.start)
 	l.add(l.error("unexpected-indent", t.start, l.tokens[j].end, "this line is indented deeper than the statement above").
 		Because("a line that is indented deeper goes on with the statement above").
-		WithLabelledFix(l.span(l.file.Source.LineStart(number+1), t.start), "", "write it as far left as the line above").
+		WithLabelledFix(l.span(l.parser.file.Source.LineStart(number+1), t.start), "", "write it as far left as the line above").
 		WithNote(l.span(l.tokens[i].start, l.tokens[i].end), "the statement above begins here"))
 	return false
 }
@@ -167,10 +168,13 @@ func (l *layout) push(s Statement, open token, column int, implicit bool) {
 		b.owner = nil
 		l.add(l.error("misplaced-brace", open.start, open.end, "this statement opens no block"))
 	}
-	if len(l.stack) == maxBlocks+1 {
+	if len(l.stack) <= maxBlocks {
+		l.stack = append(l.stack, b)
+		return
+	}
+	if l.skipped++; l.skipped == 1 {
 		l.add(l.error("too-deep", open.start, open.end, "blocks are nested more than %d deep", maxBlocks))
 	}
-	l.stack = append(l.stack, b)
 }
 
 // pop closes the block on top; end is where its text ends.
@@ -180,13 +184,9 @@ func (l *layout) pop(end int) {
 	at := l.span(b.open.start, end)
 	switch owner := b.owner.(type) {
 	case *Sentence:
-		if len(l.stack) <= maxBlocks {
-			owner.Block, owner.BlockAt = b.list, at
-		}
+		owner.Block, owner.BlockAt = b.list, at
 	case *Bad:
-		if len(l.stack) <= maxBlocks {
-			owner.Block, owner.BlockAt = b.list, at
-		}
+		owner.Block, owner.BlockAt = b.list, at
 	default:
 		for i, s := range b.list {
 			l.top().add(s, b.columns[i])
@@ -224,9 +224,12 @@ func (l *layout) closing(i int) int {
 
 func (l *layout) close(i int) int {
 	t := l.tokens[i]
-	if len(l.stack) == 1 {
+	switch {
+	case l.skipped > 0:
+		l.skipped--
+	case len(l.stack) == 1:
 		l.add(l.error("stray-brace", t.start, t.end, "this brace closes nothing").WithFix(l.span(t.start, t.end), ""))
-	} else {
+	default:
 		l.pop(t.end)
 	}
 	return l.afterBrace(i)

@@ -15,7 +15,6 @@ import (
 // becomes a kindBad token, which keeps its line from being parsed.
 type scanner struct {
 	*reporter
-	src   string // the whole file
 	pos   int
 	end   int // where the stretch ends
 	depth int // open round brackets, for telling a decimal comma from a list
@@ -23,6 +22,7 @@ type scanner struct {
 
 	first  bool // the next token is the first of its line
 	column int
+	count  int // tokens in this line
 	eol    int // where the line of pos ends, once it has been looked for
 }
 
@@ -30,8 +30,8 @@ type scanner struct {
 const tabStop = 8
 
 // lex cuts the stretch of the file from start to end.
-func lex(r *reporter, src string, start, end int) lexed {
-	l := &scanner{reporter: r, src: src, pos: start, end: end, first: true}
+func lex(r *reporter, start, end int) lexed {
+	l := &scanner{reporter: r, pos: start, end: end, first: true}
 	l.out.tokens = make([]token, 0, (end-start)/5+2)
 	l.indent()
 	for l.pos < l.end {
@@ -44,6 +44,8 @@ func lex(r *reporter, src string, start, end int) lexed {
 func (l *scanner) next() {
 	b := l.src[l.pos]
 	switch {
+	case l.count > maxTokens:
+		l.tooLong()
 	case b == ' ' || b == '\t':
 		l.pos++
 	case b == '\n' || b == '\r':
@@ -69,7 +71,7 @@ func isNameByte(b byte) bool { return 'a' <= b && b <= 'z' || 'A' <= b && b <= '
 
 // indent measures the blanks at the start of a line.
 func (l *scanner) indent() {
-	l.first, l.column = true, 0
+	l.first, l.column, l.count = true, 0, 0
 	for ; l.pos < l.end; l.pos++ {
 		switch l.src[l.pos] {
 		case ' ':
@@ -86,7 +88,18 @@ func (l *scanner) indent() {
 func (l *scanner) put(k kind, text string, start int) *token {
 	l.out.tokens = append(l.out.tokens, token{kind: k, text: text, start: start, end: l.pos, first: l.first, column: l.column})
 	l.first = false
+	l.count++
 	return &l.out.tokens[len(l.out.tokens)-1]
+}
+
+// tooLong reports a line of more tokens than a statement has and leaves the rest
+// of it out.
+func (l *scanner) tooLong() {
+	start := l.pos
+	l.pos = l.lineEnd()
+	l.add(l.error("too-long", start, start+1, "this statement is too long").Because(tooLongRule))
+	l.count = 0
+	l.bad(start)
 }
 
 // bad adds a token for what has been reported.
@@ -108,30 +121,8 @@ func (l *scanner) lineEnd() int {
 func (l *scanner) comment() {
 	start := l.pos
 	l.pos = l.lineEnd()
-	l.checkUTF8(start)
+	l.checkUTF8(start, l.pos)
 	l.out.comments = append(l.out.comments, Comment{At: l.span(start, l.pos), OwnLine: l.first})
-}
-
-// checkUTF8 reports the first byte that is no UTF-8 between start and pos.
-func (l *scanner) checkUTF8(start int) {
-	if l.told || utf8.ValidString(l.src[start:l.pos]) {
-		return
-	}
-	for i, r := range l.src[start:l.pos] {
-		if _, size := utf8.DecodeRuneInString(l.src[start+i:]); r == utf8.RuneError && size == 1 {
-			l.notUTF8(start + i)
-			return
-		}
-	}
-}
-
-// notUTF8 reports, once a file, a byte that is no UTF-8.
-func (l *scanner) notUTF8(at int) {
-	if !l.told {
-		l.told = true
-		l.add(l.error("not-utf-8", at, at+1, "the byte 0x%02X here is not UTF-8", l.src[at]).
-			Because("the file was perhaps saved in another encoding; save it as UTF-8"))
-	}
 }
 
 // word reads a name or a word of the language.
@@ -164,24 +155,40 @@ func (l *scanner) word() {
 // times the longest one that has a meaning.
 const maxLiteral = 512
 
-// quantity reads a literal. Inside brackets a comma is taken as one that separates
-// values, unless what follows has a unit and what precedes has none.
+// quantity reads a literal.
 func (l *scanner) quantity() {
 	start := l.pos
 	rest := l.src[l.pos:min(l.lineEnd(), l.pos+maxLiteral)]
 	lit, n, err := quantity.ScanComma(rest)
-	if n == 0 || l.depth > 0 && (lit.Unit == quantity.NoUnit || strings.HasPrefix(rest, "0,")) {
+	if n == 0 || l.isList(lit, rest, n) {
 		lit, n, err = quantity.Scan(rest)
 	}
 	l.pos += n
 	if err != nil {
 		l.literalError(start, err)
 		if err.Write == "" {
+			l.restOfWord()
 			l.bad(start)
 			return
 		}
 	}
 	l.putLiteral(lit, start)
+}
+
+// isList says whether the comma in 12,5 separates values, as one does without a
+// blank in a longer list, and inside brackets unless what follows has a unit and
+// what precedes has none.
+func (l *scanner) isList(lit quantity.Literal, rest string, n int) bool {
+	follows := n+1 < len(rest) && rest[n] == ',' && '0' <= rest[n+1] && rest[n+1] <= '9'
+	precedes := l.pos > 0 && l.src[l.pos-1] == ','
+	return follows || precedes || l.depth > 0 && (lit.Unit == quantity.NoUnit || strings.HasPrefix(rest, "0,"))
+}
+
+// restOfWord goes past digits and letters that belong to what has been reported.
+func (l *scanner) restOfWord() {
+	for l.pos < l.end && (isNameByte(l.src[l.pos]) || '0' <= l.src[l.pos] && l.src[l.pos] <= '9') {
+		l.pos++
+	}
 }
 
 func (l *scanner) putLiteral(lit quantity.Literal, start int) {
@@ -212,14 +219,14 @@ func (l *scanner) text(open, shut string) {
 		}
 	}
 	l.pos = end
-	l.checkUTF8(start)
+	l.checkUTF8(start, l.pos)
 	l.openText(start)
 	l.bad(start)
 }
 
 // closedText adds a text and reports quotes that only look like the right ones.
 func (l *scanner) closedText(start int, open, shut string) {
-	l.checkUTF8(start)
+	l.checkUTF8(start, l.pos)
 	if open != "\"" {
 		inner := l.src[start+len(open) : l.pos-len(shut)]
 		l.add(l.error("look-alike", start, l.pos, "texts stand between straight double quotes").

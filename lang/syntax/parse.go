@@ -2,6 +2,7 @@ package syntax
 
 import (
 	"strings"
+	"unicode/utf8"
 
 	"epure/lang/diag"
 	"epure/lang/source"
@@ -9,6 +10,8 @@ import (
 
 // maxTokens bounds one statement: an outline of ten thousand corners fits.
 const maxTokens = 1 << 17
+
+const tooLongRule = "a statement has at most 131072 words and signs"
 
 // maxDepth bounds how deep brackets and powers are nested in a statement, since
 // what walks the tree calls itself once for each.
@@ -22,7 +25,7 @@ func Parse(f *source.File, bag *diag.Bag) *File {
 	if !p.isText() {
 		return p.file
 	}
-	p.lexed = lex(p.reporter, p.src, p.start(), len(p.src))
+	p.lexed = lex(p.reporter, p.start(), len(p.src))
 	p.file.Comments = p.comments
 	l := layout{parser: p}
 	p.file.Statements = l.statements()
@@ -37,7 +40,7 @@ func ParseExpr(f *source.File, bag *diag.Bag) Expr {
 	if !p.isText() {
 		return nil
 	}
-	p.lexed = lex(p.reporter, p.src, p.start(), len(p.src))
+	p.lexed = lex(p.reporter, p.start(), len(p.src))
 	c, ok := p.ready(p.tokens, "expression")
 	if !ok {
 		return nil
@@ -54,12 +57,11 @@ func ParseExpr(f *source.File, bag *diag.Bag) Expr {
 type parser struct {
 	*reporter
 	lexed
-	src  string
 	file *File
 }
 
 func newParser(f *source.File) *parser {
-	return &parser{reporter: &reporter{file: f}, src: string(f.Text), file: &File{Source: f}}
+	return &parser{reporter: &reporter{file: f, src: string(f.Text)}, file: &File{Source: f}}
 }
 
 // start returns where the text begins, after a BOM.
@@ -70,18 +72,45 @@ func (p *parser) start() int {
 	return 0
 }
 
-// isText reports files that are surely no text, and those in UTF-16.
+// sample is how much of a file is looked at to tell whether it is a text.
+const sample = 1 << 16
+
+// isText reports files that are surely no text, or none in UTF-8: a single strange
+// byte is told where it stands, a file full of them once.
 func (p *parser) isText() bool {
 	if strings.HasPrefix(p.src, "\xff\xfe") || strings.HasPrefix(p.src, "\xfe\xff") {
 		p.add(p.error("not-utf-8", 0, 2, "the file is in UTF-16").Because("save it as UTF-8"))
 		return false
 	}
 	if n := strings.IndexByte(p.src, 0); n >= 0 {
-		p.add(p.error("not-text", n, n+1, "the file is not a text").
-			Because("a byte 0 stands here, which no text has"))
+		p.add(p.error("not-text", n, n+1, "the file is not a text").Because("a byte 0 stands here, which no text has"))
+		return false
+	}
+	head := p.src[:min(len(p.src), sample)]
+	hidden, strange := strangeBytes(head)
+	switch {
+	case hidden > 2 && hidden > len(head)/100:
+		p.add(p.error("not-text", 0, 0, "the file is not a text").Because("it is full of bytes that no text has"))
+		return false
+	case strange > 2 && strange > len(head)/20:
+		p.checkUTF8(0, len(head))
 		return false
 	}
 	return true
+}
+
+// strangeBytes counts the control characters of a text and the bytes that are no
+// UTF-8.
+func strangeBytes(text string) (hidden, strange int) {
+	for i, r := range text {
+		switch {
+		case r < ' ' && r != '\t' && r != '\n' && r != '\r' && r != '\f' || r == 0x7f:
+			hidden++
+		case r == utf8.RuneError && !strings.HasPrefix(text[i:], "\uFFFD"):
+			strange++
+		}
+	}
+	return hidden, strange
 }
 
 // statement reads the tokens of one logical line, its brace not among them. There
@@ -132,7 +161,7 @@ func (p *parser) ready(tokens []token, what string) (*converter, bool) {
 	if len(tokens) > maxTokens {
 		at := tokens[maxTokens]
 		p.add(p.error("too-long", at.start, at.end, "this statement is too long").
-			Because("a statement has at most 131072 words and signs"))
+			Because(tooLongRule))
 		return c, false
 	}
 	return c, c.brackets()

@@ -4,6 +4,7 @@ import (
 	"cmp"
 	"fmt"
 	"slices"
+	"unicode/utf8"
 
 	"epure/lang/diag"
 	"epure/lang/source"
@@ -19,6 +20,7 @@ const maxGathered = 10 * maxDiagnostics
 // reporter gathers the diagnostics of one file.
 type reporter struct {
 	file *source.File
+	src  string // its text
 	all  []diag.Diagnostic
 	told bool // that the file is not UTF-8
 }
@@ -35,6 +37,23 @@ func (r *reporter) add(d diag.Diagnostic) {
 // error makes an error; the caller adds it.
 func (r *reporter) error(code diag.Code, start, end int, format string, args ...any) diag.Diagnostic {
 	return diag.New(code, r.span(start, end), fmt.Sprintf(format, args...))
+}
+
+// checkUTF8 reports, once a file, the first byte from start to end that is no UTF-8.
+func (r *reporter) checkUTF8(start, end int) {
+	if r.told || utf8.ValidString(r.src[start:end]) {
+		return
+	}
+	for at := start; at < end; {
+		c, size := utf8.DecodeRuneInString(r.src[at:])
+		if c == utf8.RuneError && size == 1 {
+			r.told = true
+			r.add(r.error("not-utf-8", at, at+1, "the byte 0x%02X here is not UTF-8", r.src[at]).
+				Because("the file was perhaps saved in another encoding; save it as UTF-8"))
+			return
+		}
+		at += size
+	}
 }
 
 // flush moves the first diagnostics of the file into a bag.

@@ -169,7 +169,7 @@ func (l *scanner) junk(start int) {
 		}
 		l.pos++
 	}
-	l.notUTF8(start)
+	l.checkUTF8(start, l.pos)
 	l.bad(start)
 }
 

@@ -96,7 +96,7 @@ func (c *converter) hole(i, end int) (*Hole, int) {
 	shut := i + n
 	at := c.span(i, shut+1)
 	inner := *c.parser
-	inner.lexed = lex(c.reporter, c.src, i+1, shut)
+	inner.lexed = lex(c.reporter, i+1, shut)
 	if len(inner.tokens) == 0 {
 		c.add(c.error("bad-hole", i, shut+1, "this hole is empty").Because("`\\{` stands for a brace"))
 		return nil, shut + 1
