@@ -38,7 +38,7 @@ func Dashes(t LineType, width, length float64) []float64 {
 	}
 	between := sum(rest) * width
 	n := math.Ceil((length-dash*width)/(dash*width+between) - countSlack)
-	if !(length >= (2*dash*width+between)*(1-countSlack)) || n < 1 {
+	if !(length >= (2*dash*width+between)*(1-countSlack)) || n < 1 || math.IsInf(n, 1) {
 		return nil
 	}
 	return pattern((length-n*between)/(n+1), rest, width)
@@ -53,7 +53,7 @@ func DashesClosed(t LineType, width, length float64) []float64 {
 	}
 	between := sum(rest) * width
 	n := math.Ceil(length/(dash*width+between) - countSlack)
-	if !(n >= 2) {
+	if !(n >= 2) || math.IsInf(n, 1) {
 		return nil
 	}
 	return pattern(length/n-between, rest, width)
