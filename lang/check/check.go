@@ -145,13 +145,13 @@ func (c *checker) form(s *Symbol, st *syntax.Sentence, block *Symbol) {
 		c.misplaced(s, "`%s` stands inside a block", f.Word)
 	case block == nil && s.Name == "" && !f.Block:
 		s.Bad = true
-		c.blame(c.report("needs-name", s.FormSpan, "a %s outside of blocks needs a name", f.Word).
+		c.blame(c.report("needs-name", s.FormSpan, "%s outside of blocks needs a name", a(f.Word)).
 			WithLabelledFix(source.Span{File: s.FormSpan.File, Start: s.FormSpan.Start, End: s.FormSpan.Start}, "X = ", "write a name and `=` before it"))
 	}
 }
 
 func (c *checker) misplaced(s *Symbol, format, word string) {
-	s.Bad = true
+	s.Bad, s.misplaced = true, true
 	d := c.report("wrong-place", s.FormSpan, format, word)
 	if len(s.Form.Within) > 0 {
 		d = d.Because("it belongs to " + ticked(s.Form.Within, "or") + ", between `{` and `}`")
@@ -182,7 +182,7 @@ func (c *checker) openBlock(s *Symbol, st *syntax.Sentence) {
 	switch {
 	case s.Form != nil && !s.Form.Block:
 		s.Bad = true
-		c.blame(c.report("not-a-block", s.FormSpan, "a %s opens no block", s.Form.Word))
+		c.blame(c.report("not-a-block", s.FormSpan, "%s opens no block", a(s.Form.Word)))
 	case s.Form == nil && st.Thing == nil:
 		s.Bad = true
 		c.blame(c.report("not-a-block", st.Span(), "a value opens no block"))
@@ -227,6 +227,9 @@ func (c *checker) allowed(s *Symbol) bool {
 
 func (c *checker) unique(s *Symbol, names map[string]*Symbol) bool {
 	first, ok := names[s.Name]
+	if ok && first.misplaced {
+		return false // reported already
+	}
 	if ok {
 		c.bag.Add(c.report("name-taken", s.NameSpan, "%s is defined already", source.Quote(s.Name)).WithNote(first.NameSpan, "the first one is here"))
 	}
@@ -270,6 +273,10 @@ func (c *checker) cycle(s *Symbol, used *source.Span) {
 		}
 	}
 	ring := c.path[first:]
+	reported := false
+	for _, l := range ring {
+		reported = reported || l.symbol.ringed
+	}
 	ring[len(ring)-1].span = *used
 	d := c.report("cycle", s.NameSpan, "%s depends on itself", source.Quote(s.Name))
 	if len(ring) > 1 {
@@ -281,9 +288,11 @@ func (c *checker) cycle(s *Symbol, used *source.Span) {
 	}
 	for _, l := range ring {
 		d = d.WithNote(l.span, source.Quote(l.symbol.Name)+" needs "+source.Quote(l.span.Text()))
-		l.symbol.Bad = true
+		l.symbol.Bad, l.symbol.ringed = true, true
 	}
-	c.bag.Add(d)
+	if !reported { // two rings with a name in common are one mistake
+		c.bag.Add(d)
+	}
 }
 
 func ringText(names []string) string {

@@ -96,7 +96,7 @@ func (c *checker) unknownMember(m *syntax.Member, x catalogue.Kind) {
 // whatHas names a kind by its form where it has one.
 func whatHas(k catalogue.Kind) string {
 	if k.Type != "" {
-		return "a " + k.Type
+		return a(k.Type)
 	}
 	return name(k)
 }

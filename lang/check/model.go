@@ -44,8 +44,10 @@ type Symbol struct {
 	Members  []*Symbol // of a block
 	Bad      bool      // something in it is wrong
 
-	sentence *syntax.Sentence
-	state    state
+	sentence          *syntax.Sentence
+	meant             map[string]bool // clause words that unknown ones were probably meant to be
+	misplaced, ringed bool
+	state             state
 }
 
 // Bound is a clause of a form with its values; words and expressions of a

@@ -13,7 +13,7 @@ import (
 
 // thing checks the text and the clauses of a form against the catalogue.
 func (c *checker) thing(s *Symbol) {
-	s.Clauses = map[string]*Bound{}
+	s.Clauses, s.meant = map[string]*Bound{}, map[string]bool{}
 	c.text(s)
 	for _, cl := range s.thing().Clauses {
 		c.clause(s, &cl)
@@ -27,10 +27,10 @@ func (s *Symbol) thing() *syntax.Thing { return s.sentence.Thing }
 func (c *checker) text(s *Symbol) {
 	switch {
 	case s.Text == nil && s.Form.Text == catalogue.Must:
-		c.blame(c.report("missing-text", after(s.FormSpan), "a %s needs a text in quotes", s.Form.Word).
+		c.blame(c.report("missing-text", after(s.FormSpan), "%s needs a text in quotes", a(s.Form.Word)).
 			WithLabelledFix(after(s.FormSpan), ` "…"`, "write it after the word, as "+s.Form.Word+` "…"`))
 	case s.Text != nil && s.Form.Text == catalogue.Never:
-		c.blame(c.report("unexpected-text", s.Text.Span(), "a %s takes no text", s.Form.Word).
+		c.blame(c.report("unexpected-text", s.Text.Span(), "%s takes no text", a(s.Form.Word)).
 			Because("a remark can stand after #").WithFix(s.Text.Span(), ""))
 	case s.Text != nil:
 		c.expr(s.Text)
@@ -81,9 +81,10 @@ func (c *checker) unknownClause(s *Symbol, cl *syntax.Clause) {
 	for i := range s.Form.Clauses {
 		words = append(words, s.Form.Clauses[i].Word)
 	}
-	d := c.report("unknown-clause", cl.Word.Span(), "a %s has no clause %s", s.Form.Word, source.Quote(cl.Word.Text))
+	d := c.report("unknown-clause", cl.Word.Span(), "%s has no clause %s", a(s.Form.Word), source.Quote(cl.Word.Text))
 	if w, ok := spell.Nearest(cl.Word.Text, words); ok {
 		d = d.WithFix(cl.Word.Span(), w)
+		s.meant[w] = true
 	} else {
 		d = d.Because("its clauses are " + list(words, "and"))
 	}
@@ -179,12 +180,14 @@ func missingUnits(takes []catalogue.Kind) []string {
 // present checks that what is needed is there and what excludes each other is not.
 func (c *checker) present(s *Symbol) {
 	for i := range s.Form.Clauses {
-		if cl := &s.Form.Clauses[i]; cl.Needed && s.Clauses[cl.Word] == nil {
-			c.blame(c.report("missing-clause", after(s.FormSpan), "a %s needs `%s`", s.Form.Word, cl.Word).Because(cl.Help))
+		if cl := &s.Form.Clauses[i]; cl.Needed && s.Clauses[cl.Word] == nil && !s.meant[cl.Word] {
+			c.blame(c.report("missing-clause", after(s.FormSpan), "%s needs `%s`", a(s.Form.Word), cl.Word).Because(cl.Help))
 		}
 	}
 	for _, ch := range s.Form.Choices {
-		c.choice(s, ch)
+		if !slices.ContainsFunc(ch.Ways, func(w []string) bool { return slices.ContainsFunc(w, func(x string) bool { return s.meant[x] }) }) {
+			c.choice(s, ch)
+		}
 	}
 }
 
@@ -201,7 +204,7 @@ func (c *checker) choice(s *Symbol, ch catalogue.Choice) {
 	case ch.Any && len(there) > 0, slices.ContainsFunc(ch.Ways, func(w []string) bool { return same(w, there) }):
 		return
 	case len(there) == 0:
-		c.blame(c.report("missing-clause", after(s.FormSpan), "a %s needs %s", s.Form.Word, ways(ch.Ways)))
+		c.blame(c.report("missing-clause", after(s.FormSpan), "%s needs %s", a(s.Form.Word), ways(ch.Ways)))
 		return
 	}
 	for _, w := range ch.Ways { // part of one way: the rest is missing
@@ -216,7 +219,7 @@ func (c *checker) choice(s *Symbol, ch catalogue.Choice) {
 		other = there[1]
 	}
 	c.blame(c.report("clause-conflict", last.Span, "`%s` and `%s` exclude each other", other.Clause.Word, last.Clause.Word).
-		Because("a "+s.Form.Word+" takes "+ways(ch.Ways)).WithNote(other.Span, "the other one is here"))
+		Because(a(s.Form.Word)+" takes "+ways(ch.Ways)).WithNote(other.Span, "the other one is here"))
 }
 
 func same(way []string, there []*Bound) bool {

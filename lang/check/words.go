@@ -83,6 +83,14 @@ func ticked(words []string, last string) string {
 	return list(out, last)
 }
 
+// a puts the article before a word of the catalogue.
+func a(word string) string {
+	if strings.ContainsRune("aeiou", rune(word[0])) {
+		return "an " + word
+	}
+	return "a " + word
+}
+
 // fits tells whether a value of kind k may stand where one of the kinds is wanted.
 func fits(k catalogue.Kind, takes []catalogue.Kind) bool {
 	if k.Class == catalogue.Unknown {
