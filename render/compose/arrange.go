@@ -146,6 +146,10 @@ func strategies() []strategy {
 // enoughTries is the number of arrangements among which the roomiest is chosen.
 const enoughTries = 4
 
+// laterCost is what a later choice of corners must be roomier by, mm: the first
+// ones are those that a draughtsman would try first.
+const laterCost = 2
+
 // arrange places all items. It reports whether they fit.
 func (l *layout) arrange() bool {
 	roots := l.roots()
@@ -163,7 +167,7 @@ func (l *layout) arrange() bool {
 		if !l.tight {
 			l.even()
 		}
-		if score := l.airiness(); score > bestScore+slack {
+		if score := l.airiness() - float64(found)*laterCost; score > bestScore+slack {
 			bestScore, best = score, append([]item(nil), l.items...)
 		}
 		if found++; found == enoughTries {

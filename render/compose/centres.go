@@ -2,8 +2,10 @@ package compose
 
 import (
 	"math"
+	"slices"
 
 	"epure/eval/scene"
+	"epure/geom/curve"
 	"epure/geom/vec"
 	"epure/render/drawing"
 )
@@ -20,32 +22,30 @@ const centreOvershoot = 3
 type turnedSolid struct {
 	root  *scene.Primitive
 	parts []*scene.Solid
+	names []string // in the view, of the parts
 }
 
 // turnedSolids lists the primitives of the view, in the order drawn.
 func (p *picture) turnedSolids() []turnedSolid {
-	var all []*scene.Solid
-	for _, s := range p.solids {
-		all = append(all, s.value)
-	}
+	all := p.solids
 	for _, f := range p.view.Faint {
 		if s, ok := f.Value.(*scene.Solid); ok {
-			all = append(all, s)
+			all = append(all[:len(all):len(all)], solid{f.Name, s})
 		}
 	}
 	var out []turnedSolid
 next:
 	for _, s := range all {
-		if s.Root == nil {
+		if s.value.Root == nil {
 			continue
 		}
 		for i := range out {
-			if out[i].root == s.Root {
-				out[i].parts = append(out[i].parts, s)
+			if out[i].root == s.value.Root {
+				out[i].parts, out[i].names = append(out[i].parts, s.value), append(out[i].names, s.name)
 				continue next
 			}
 		}
-		out = append(out, turnedSolid{s.Root, []*scene.Solid{s}})
+		out = append(out, turnedSolid{s.value.Root, []*scene.Solid{s.value}, []string{s.name}})
 	}
 	return out
 }
@@ -66,16 +66,16 @@ func (p *picture) drawCentres() {
 	}
 }
 
-// drawAxis draws the axis from the lowest to the highest point of the parts
-// along it. Axes that lie on one line are drawn as one.
+// drawAxis draws the axis as far as the outline of the parts reaches along it. Axes
+// that lie on one line are drawn as one.
 func (p *picture) drawAxis(t turnedSolid) {
-	lo, hi := math.Inf(1), math.Inf(-1)
-	for _, s := range t.parts {
-		a, b := s.Body.Bounds(t.root.Base)
-		lo, hi = min(lo, a.Z), max(hi, b.Z)
+	o := p.flatten(t.root.Base.O)
+	d := p.flatten(t.root.Base.O.Add(t.root.Base.Z)).Sub(o).Unit()
+	lo, hi := p.outlineAlong(t, o, d)
+	if !(lo < hi) {
+		lo, hi = p.boundsAlong(t, o)
 	}
-	a := p.flatten(t.root.Base.Point(vec.V3{Z: lo}))
-	b := p.flatten(t.root.Base.Point(vec.V3{Z: hi}))
+	a, b := o.Along(d, lo), o.Along(d, hi)
 	for i := range p.strokes {
 		if s := &p.strokes[i]; s.role == drawing.CentreLine && s.along(a, b) {
 			s.stretch(a, b)
@@ -83,6 +83,43 @@ func (p *picture) drawAxis(t turnedSolid) {
 		}
 	}
 	p.straight(p.key(t.root.Name, "axis"), drawing.CentreLine, a, b).over = centreOvershoot
+}
+
+// outlineAlong is the first and the last place, mm along d from o, where the line
+// through o along d meets the outline of the parts in the view.
+func (p *picture) outlineAlong(t turnedSolid, o, d vec.V2) (lo, hi float64) {
+	lo, hi = math.Inf(1), math.Inf(-1)
+	for _, s := range p.strokes {
+		if !outlineRole(s.role) || !slices.Contains(t.names, s.key.Thing) {
+			continue
+		}
+		for _, piece := range s.pieces {
+			c, ok := piece.path.(curve.Curve2)
+			if !ok {
+				continue
+			}
+			a := curve.Arc2{Curve2: c, T0: piece.t0, T1: piece.t1}
+			ts := append([]float64{a.T0, a.T1}, a.Cross(o, d.Left(), sameLine*t.parts[0].Body.Size())...)
+			for _, at := range ts {
+				q := a.At(at).Sub(o)
+				if math.Abs(q.Cross(d)) <= sameLine*t.parts[0].Body.Size() {
+					lo, hi = min(lo, q.Dot(d)), max(hi, q.Dot(d))
+				}
+			}
+		}
+	}
+	return lo, hi
+}
+
+// boundsAlong is the extent of the parts along their axis, as seen.
+func (p *picture) boundsAlong(t turnedSolid, o vec.V2) (lo, hi float64) {
+	lo, hi = math.Inf(1), math.Inf(-1)
+	for _, s := range t.parts {
+		a, b := s.Body.Bounds(t.root.Base)
+		lo, hi = min(lo, a.Z), max(hi, b.Z)
+	}
+	seen := p.flatten(t.root.Base.O.Add(t.root.Base.Z)).Sub(o).Len()
+	return lo * seen, hi * seen
 }
 
 // sameLine is how far, as a share of its length, a centre line may lie beside

@@ -6,9 +6,9 @@ import (
 	"strings"
 
 	"epure/eval/scene"
-	"epure/geom/curve"
 	"epure/geom/vec"
 	"epure/render/drawing"
+	"epure/render/furniture"
 )
 
 // Dimensions. A length stands outside the view, on the side where its extension
@@ -18,8 +18,8 @@ import (
 
 // Distances of dimension lines, paper mm (the reference notes, section 6).
 const (
-	firstDimension = 10.0
-	nextDimension  = 8.0
+	firstDimension = furniture.FirstOffset
+	nextDimension  = furniture.NextOffset
 )
 
 // trueSine is the sine of the angle out of the picture plane under which a length
@@ -69,7 +69,7 @@ func (d *draft) dimKey(m *scene.Dimension) drawing.Key { return d.p.key(m.Name, 
 
 // withSign puts a sign before a figure unless it is there.
 func withSign(sign, text string) string {
-	if strings.HasPrefix(text, sign) {
+	if strings.HasPrefix(text, sign) || strings.HasPrefix(text, "Ø") {
 		return text
 	}
 	return sign + text
@@ -286,9 +286,4 @@ func (p *picture) seenTrue(a scene.Anchor) bool {
 		return !pattern && level(a.A) && level(a.B)
 	}
 	return pattern
-}
-
-// wholeCircle is a circle of space in the view.
-func (p *picture) wholeCircle(c scene.Circle) curve.Arc2 {
-	return curve.Arc{Curve: curve.Circle(c.F, c.R), T1: 2 * math.Pi}.Project(p.frame)
 }

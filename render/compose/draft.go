@@ -48,6 +48,7 @@ func newDraft(p *picture, scale float64, k ink, note string) *draft {
 	d.drawStrokes()
 	d.core = d.coreBox()
 	d.outline = d.outlineChords()
+	d.keepRays()
 	d.drawSpots()
 	d.drawSigns()
 	d.dimension()
@@ -142,6 +143,20 @@ func (d *draft) outlineChords() []line {
 	return f.lines
 }
 
+// rayLength is how far lettering keeps clear of projectors that will leave the
+// view, paper mm.
+const rayLength = 30
+
+// keepRays keeps lettering clear of the projectors.
+func (d *draft) keepRays() {
+	for _, u := range d.p.rays {
+		for _, q := range d.p.links {
+			a := d.at(d.p.flatten(q))
+			d.field.lines = append(d.field.lines, line{a, a.Along(u, rayLength)})
+		}
+	}
+}
+
 // drawHatching hatches the outlines that ask for it.
 func (d *draft) drawHatching() {
 	for _, h := range d.p.hatched {
@@ -185,18 +200,20 @@ func (d *draft) drawSpots() {
 // for the side that is up.
 func (d *draft) drawSigns() {
 	for _, s := range d.p.signs {
-		if t, ok := d.signText(s); ok {
+		if t, ok := d.signText(s, d.ink.small); ok {
 			d.write(s.key, t)
 		}
 	}
-	for _, s := range d.p.faces {
-		t, ok := d.signText(s)
-		if !ok {
-			continue
-		}
-		if lines, words := d.field.count(textRoom(t).grown(lettersClear)); lines+words == 0 {
-			d.write(s.key, t)
-			return
+	for _, h := range []float64{d.ink.text, d.ink.small} {
+		for _, s := range d.p.faces {
+			t, ok := d.signText(s, h)
+			if !ok {
+				continue
+			}
+			if lines, words := d.field.count(textRoom(t).grown(lettersClear)); lines+words == 0 {
+				d.write(s.key, t)
+				return
+			}
 		}
 	}
 }
@@ -204,12 +221,8 @@ func (d *draft) drawSigns() {
 // lettersClear is the least distance between lettering and lines, paper mm.
 const lettersClear = 0.6
 
-// signText places lettering along a line of the view, false when it has no room.
-func (d *draft) signText(s sign) (drawing.Text, bool) {
-	h := d.ink.text
-	if s.side != 0 {
-		h = d.ink.small
-	}
+// signText places lettering of the height h along a line of the view, false when it has no room.
+func (d *draft) signText(s sign, h float64) (drawing.Text, bool) {
 	if font.Width(s.text, h, false)+2*h > s.room*d.scale || s.tall > 0 && s.tall*d.scale < 2*h {
 		return drawing.Text{}, false
 	}

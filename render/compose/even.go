@@ -8,7 +8,8 @@ import (
 
 // Evening out. Every free cluster is moved to the middle of the room that it
 // has to either side, every view in projection along its projectors likewise,
-// again and again until nothing moves much. Notes and tables stay in their corners.
+// again and again until nothing moves much. Notes stay in their corner, and tables
+// move up and down only.
 
 // evenRounds bounds the rounds; each halves what is uneven, so that after thirty nothing
 // is left to see.
@@ -30,7 +31,11 @@ func (l *layout) even() {
 func (l *layout) evenCluster(root int) float64 {
 	members := l.clusterOf(root)
 	moved := 0.0
-	if l.items[root].kind != viewItem {
+	axes := []vec.V2{{X: 1}, {Y: 1}}
+	switch l.items[root].kind {
+	case tableItem:
+		axes = axes[1:] // tables stay flush with their margin
+	case noteItem:
 		return 0
 	}
 	for _, m := range members[1:] {
@@ -39,7 +44,7 @@ func (l *layout) evenCluster(root int) float64 {
 	if l.items[root].fixed {
 		return moved
 	}
-	for _, u := range []vec.V2{{X: 1}, {Y: 1}} {
+	for _, u := range axes {
 		moved += l.shift(members, u, (l.travel(members, u)-l.travel(members, u.Scale(-1)))/2)
 	}
 	return moved

@@ -15,7 +15,7 @@ import (
 const (
 	figureMargin = 5.0   // round the content, paper mm
 	figureWidest = 190.0 // of a figure without a width: what a page of A4 holds
-	figureTall   = 1.4   // the height of a figure over its width, at most, while its scale is open
+	figureTall   = 240.0 // its height, at most, while its scale is open
 )
 
 // figure composes a figure.
@@ -60,7 +60,7 @@ func (j *job) figureAttempt(sets [][]*picture, width float64) *attempt {
 		return j.figureFilling(sets, width)
 	}
 	for _, s := range furniture.Scales() {
-		if a := j.figureAt(sets, s.Value(), figureWidest, figureWidest*figureTall); a != nil {
+		if a := j.figureAt(sets, s.Value(), figureWidest, figureTall); a != nil {
 			return a
 		}
 	}
@@ -76,7 +76,7 @@ const fillingSteps = 24
 func (j *job) figureFilling(sets [][]*picture, width float64) *attempt {
 	widest := 0.0
 	for _, p := range sets[0] {
-		widest = max(widest, p.size.X, p.size.Y/figureTall)
+		widest = max(widest, p.size.X, p.size.Y*width/figureTall)
 	}
 	if widest == 0 {
 		return nil
@@ -85,10 +85,7 @@ func (j *job) figureFilling(sets [][]*picture, width float64) *attempt {
 	var best *attempt
 	for range fillingSteps {
 		mid := (lo + hi) / 2
-		if best == nil {
-			mid = hi / math.Ldexp(1, 1) // the first tries go down by halves until one fits
-		}
-		if a := j.figureAt(sets, mid, width, width*figureTall); a != nil {
+		if a := j.figureAt(sets, mid, width, figureTall); a != nil {
 			best, lo = a, mid
 		} else {
 			hi = mid

@@ -85,30 +85,95 @@ func generatorsOf(s *scene.Solid, d division) []generator {
 }
 
 // drawGenerators draws the generators of every solid of the view, and their
-// numbers when these are wanted.
+// numbers when these are wanted. Of two that fall together on paper one is drawn,
+// the visible one first.
 func (p *picture) drawGenerators(b *scene.Block) {
 	bodies := p.bodies()
 	lines := view.Lines(bodies, p.frame)
 	for _, s := range p.solids {
 		gens := generatorsOf(s.value, divisionOf(b, s.value))
+		var arcs []curve.Arc
 		for _, g := range gens {
-			pieces := view.Without(view.SplitBy([]curve.Arc{g.arc}, bodies, p.frame), lines)
-			for i, l := range pieces {
-				name := ordinal("generator", g.number)
-				if i > 0 {
-					name = ordinal(name, i+1)
-				}
-				stroke := p.draw(p.key(s.name, name), drawing.Generator, l.Image)
-				if !l.Visible {
-					stroke.pen = drawing.Group.Hidden
-				}
-			}
+			arcs = append(arcs, g.arc)
 			p.links = append(p.links, g.arc.Start(), g.arc.End())
+		}
+		count := map[int]int{}
+		for _, l := range view.Without(view.SplitBy(arcs, bodies, p.frame), lines) {
+			n := gens[l.A].number
+			name := ordinal("generator", n)
+			if count[n]++; count[n] > 1 {
+				name = ordinal(name, count[n])
+			}
+			stroke := p.draw(p.key(s.name, name), drawing.Generator, l.Image)
+			if !l.Visible {
+				stroke.pen = drawing.Group.Hidden
+			}
 		}
 		if p.shows("numbers") {
 			p.numberGenerators(s, gens)
 		}
 	}
+	p.clearCentres()
+}
+
+// clearCentres takes centre lines away where a generator lies on them: a
+// continuous line and a dashed one on the same place look like neither.
+func (p *picture) clearCentres() {
+	var kept []stroke
+	for _, c := range p.strokes {
+		if c.role != drawing.CentreLine {
+			kept = append(kept, c)
+			continue
+		}
+		kept = append(kept, p.uncovered(c)...)
+	}
+	p.strokes = kept
+}
+
+// uncovered are the parts of a straight line that no generator lies on; its ends
+// keep their overshoot.
+func (p *picture) uncovered(c stroke) []stroke {
+	a, e := c.pieces[0].path.At(c.pieces[0].t0), c.pieces[0].path.At(c.pieces[0].t1)
+	d, whole := e.Sub(a).Unit(), a.Dist(e)
+	free := [][2]float64{{0, whole}}
+	for _, g := range p.strokes {
+		if g.role != drawing.Generator || len(g.pieces) != 1 {
+			continue
+		}
+		q, r := g.pieces[0].path.At(g.pieces[0].t0), g.pieces[0].path.At(g.pieces[0].t1)
+		if c.along(q, r) {
+			t, u := q.Sub(a).Dot(d), r.Sub(a).Dot(d)
+			free = without(free, min(t, u), max(t, u), sameLine*whole)
+		}
+	}
+	if len(free) == 1 && free[0] == [2]float64{0, whole} {
+		return []stroke{c}
+	}
+	var out []stroke
+	for _, f := range free {
+		part := c
+		part.over, part.pieces = 0, []track{segment(a.Along(d, f[0]), a.Along(d, f[1]))}
+		out = append(out, part)
+	}
+	for _, ends := range [2][2]vec.V2{{e, a}, {a, e}} {
+		stub := c
+		stub.pieces, stub.tip = []track{segment(ends[0], ends[1])}, vec.V2{Y: c.over}
+		out = append(out, stub)
+	}
+	return out
+}
+
+// without takes lo..hi out of intervals, dropping what is shorter than least.
+func without(free [][2]float64, lo, hi, least float64) [][2]float64 {
+	var out [][2]float64
+	for _, f := range free {
+		for _, g := range [2][2]float64{{f[0], min(f[1], lo)}, {max(f[0], hi), f[1]}} {
+			if g[1]-g[0] > least {
+				out = append(out, g)
+			}
+		}
+	}
+	return out
 }
 
 // numberGenerators writes the numbers at the wide ends, outward from the axis.

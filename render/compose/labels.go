@@ -6,6 +6,7 @@ import (
 	"epure/geom/vec"
 	"epure/render/drawing"
 	"epure/render/font"
+	"epure/render/furniture"
 )
 
 // Lettering beside points. Every text tries places round its point, near ones
@@ -21,7 +22,6 @@ type place struct {
 	text   string
 	steps  []float64 // distances to try, paper mm
 	turns  []float64 // turns from prefer to try, radians
-	leader bool      // a line leads from the point to the text
 }
 
 // Costs of a place. One word covered is worse than any number of lines that a
@@ -48,7 +48,7 @@ func (d *draft) settle(q place) drawing.Text {
 			s, c := math.Sincos(turn)
 			dir := vec.V2{X: float64(q.prefer.X*c) - float64(q.prefer.Y*s), Y: float64(q.prefer.X*s) + float64(q.prefer.Y*c)}
 			t := beside(q, dir, r)
-			if cost := base + d.cost(q, t); cost < bestCost {
+			if cost := base + d.cost(t); cost < bestCost {
 				best, bestCost = t, cost
 			}
 		}
@@ -56,17 +56,9 @@ func (d *draft) settle(q place) drawing.Text {
 	return best
 }
 
-// cost counts what a text and its leader would lie on.
-func (d *draft) cost(q place, t drawing.Text) float64 {
+// cost counts what a text would lie on.
+func (d *draft) cost(t drawing.Text) float64 {
 	lines, words := d.field.count(textRoom(t).grown(lettersClear))
-	if q.leader {
-		a, b := leaderOf(q.at, t)
-		for _, w := range d.field.words {
-			if w.meets(line{a, b}) {
-				words++
-			}
-		}
-	}
 	return float64(words*wordCost + lines*lineCost)
 }
 
@@ -94,19 +86,6 @@ func fan(step float64, n int) []float64 {
 	return out
 }
 
-// leaderGap is the distance between a leader's end and its text, paper mm.
-const leaderGap = 1
-
-// leaderOf is the line from a point to the middle of the nearer side of a text.
-func leaderOf(at vec.V2, t drawing.Text) (vec.V2, vec.V2) {
-	w := font.Width(t.String, t.Height, t.Bold)/2 + leaderGap
-	end := vec.V2{X: t.At.X + w, Y: t.At.Y + t.Height/2}
-	if at.X < t.At.X {
-		end.X = t.At.X - w
-	}
-	return at, end
-}
-
 // crowdedRow is the least distance in heights of lettering between the numbers of a row.
 const crowdedRow = 1.6
 
@@ -121,7 +100,7 @@ func (d *draft) drawTags() {
 		if t.row > 1 && (t.row-1)%rowStep(t.room*d.scale, h*crowdedRow) != 0 {
 			continue
 		}
-		q := place{at: d.at(t.at), prefer: t.away, past: t.past, height: h, text: t.text, steps: []float64{1.5, 3, 5, 7.5}, turns: fan(math.Pi/9, 3)}
+		q := place{at: d.at(t.at), prefer: t.away, past: t.past, height: h, text: t.text, steps: []float64{1.5, 3, 5, 7.5}, turns: fan(math.Pi/9, 4)}
 		d.write(t.key, d.settle(q))
 	}
 }
@@ -151,17 +130,89 @@ func (d *draft) nameSpots() {
 	}
 }
 
-// drawLabels writes the labels of the view, each with a short leader.
+// leaderLengths are the lengths of leaders to try, paper mm, and leaderTurns the
+// number of directions round the point.
+func leaderLengths() []float64 { return []float64{6, 8, 11, 15, 20} }
+
+const leaderTurns = 16
+
+// stemCost is the cost of a line that a leader crosses.
+const stemCost = 12
+
+// drawLabels writes the labels of the view, each over the landing of a leader:
+// with an arrow at a point of the outline, a dot elsewhere.
 func (d *draft) drawLabels() {
 	for _, l := range d.p.labels {
-		at := d.at(d.p.flatten(l.At))
+		q, ok := d.p.locate(l.At)
+		if !ok {
+			continue
+		}
+		at := d.at(q)
+		end := furniture.EndDot
+		if d.onOutline(at) {
+			end = furniture.EndArrow
+		}
 		away := at.Sub(d.core.Centre()).Unit()
-		q := place{at: at, prefer: away, height: d.ink.text, text: l.Text, steps: []float64{5, 7, 9.5, 13, 18}, turns: fan(math.Pi/8, 8), leader: true}
-		t := d.settle(q)
-		a, b := leaderOf(at, t)
-		d.stroke(d.p.key(l.Name, "label/leader"), drawing.Dimension, drawing.Line{A: a, B: b})
-		dot := drawing.DotMark(d.p.key(l.Name, "label/dot"), at, dotSize)
-		d.add(dot)
-		d.write(d.p.key(l.Name, "label"), t)
+		var best []drawing.Mark
+		bestCost := math.Inf(1)
+		for i, r := range leaderLengths() {
+			for k := range leaderTurns {
+				dir := drawing.Dir(2 * math.Pi * (float64(k) + 0.5) / leaderTurns)
+				lead := furniture.Leader{Tip: at, Elbow: at.Along(dir, r), End: end, Text: l.Text}
+				cost := float64(i*stepCost) + turnCost*4*(1-dir.Dot(away)) + d.grazing(at, dir)
+				marks := lead.Marks(d.p.key(l.Name, "label"), d.style())
+				if cost += d.leaderCost(marks, at); cost < bestCost {
+					best, bestCost = marks, cost
+				}
+			}
+		}
+		for _, m := range best {
+			d.add(m)
+		}
 	}
+}
+
+// onOutline reports whether a point of the paper lies on a line of the outline.
+func (d *draft) onOutline(at vec.V2) bool {
+	const touch = 0.15 // paper mm: chords lie off their arcs by less than this
+	q := quadrangle{at.Sub(vec.V2{X: touch, Y: touch}), vec.V2{X: 2 * touch}, vec.V2{Y: 2 * touch}}
+	for _, l := range d.outline {
+		if q.meets(l) {
+			return true
+		}
+	}
+	return false
+}
+
+// grazing is the cost of a leader that runs along the line it points at.
+func (d *draft) grazing(at, dir vec.V2) float64 {
+	const touch, flat = 0.15, 0.5 // paper mm; the sine of 30°
+	q := quadrangle{at.Sub(vec.V2{X: touch, Y: touch}), vec.V2{X: 2 * touch}, vec.V2{Y: 2 * touch}}
+	for _, l := range d.outline {
+		if q.meets(l) && math.Abs(l.b.Sub(l.a).Unit().Cross(dir)) < flat {
+			return 2 * stemCost
+		}
+	}
+	return 0
+}
+
+// leaderCost counts what the text and the stem of a leader would lie on.
+func (d *draft) leaderCost(marks []drawing.Mark, tip vec.V2) float64 {
+	cost := 0.0
+	for _, m := range marks {
+		switch s := m.Shape.(type) {
+		case drawing.Text:
+			cost += d.cost(s)
+		case drawing.Line:
+			// A thin box round the line, less what lies at the tip, where it must touch.
+			a, u := s.A, s.B.Sub(s.A).Unit()
+			if a == tip {
+				a = a.Along(u, 1)
+			}
+			n := u.Left().Scale(lettersClear)
+			lines, words := d.field.count(quadrangle{a.Sub(n), s.B.Sub(a), n.Scale(2)})
+			cost += float64(lines*stemCost + words*wordCost)
+		}
+	}
+	return cost
 }

@@ -4,6 +4,7 @@ import (
 	"testing"
 
 	"epure/eval/scene"
+	"epure/geom/vec"
 )
 
 func TestRainHood(t *testing.T) {
@@ -11,12 +12,81 @@ func TestRainHood(t *testing.T) {
 	front := elevation("front", subjects("B", h.B))
 	front.Faint = subjects("K", h.K)
 	top := plan("top", subjects("B", h.B), front)
+	side := &scene.View{Form: "elevation", Name: "end", Along: vec.V3{X: -1}, Of: front.Of, From: front, Show: shown()}
 	b := &scene.Block{Form: "sheet", Name: "hood", Title: "Rain hood", Size: "A2", Titles: &scene.Titles{},
-		Views: []*scene.View{front, top, pattern("flat", h.D, "generators", "numbers")},
-		Notes: []*scene.Note{{Name: "note", Text: "Pattern seen from outside. Slant 286.4 mm."}}}
+		Views: []*scene.View{front, top, side, pattern("flat", h.D, "generators", "numbers")},
+		Notes: []*scene.Note{{Name: "note", Text: "Pattern seen from outside. Slant 286.4 mm."}},
+		Dimensions: []*scene.Dimension{
+			{Name: "K.height", On: front, Anchor: scene.Linear{B: vec.V3{Z: 260}}, Text: "260"},
+			{Name: "foot", On: front, Anchor: scene.Linear{A: vec.V3{X: -120}, B: vec.V3{X: 35}}, Text: "155"},
+			{Name: "inset", On: front, Anchor: scene.Linear{A: vec.V3{X: 35}, B: vec.V3{X: 120}}, Text: "85"},
+			{Name: "K.base.diameter", On: top, Anchor: scene.Diameter{Circle: scene.Circle{F: vec.World, R: 120}}, Text: "240"},
+			{Name: "tilt", On: front, Anchor: scene.Angle{Apex: vec.V3{X: 35}, A: vec.V3{X: 1}, B: vec.V3{X: 120, Z: 260}.Unit()}, Text: "65.2°"},
+			{Name: "wrong", On: top, Anchor: scene.Linear{B: vec.V3{Z: 260}}, Text: "260"},
+		},
+		Labels: []*scene.Label{{Name: "tip", Text: "apex", At: vec.V3{Z: 260}, On: []*scene.View{front, top}}, {Name: "eave", Text: "cut edge, a parabola", At: vec.V3{X: 56.25, Z: 46.04}, On: []*scene.View{front}}},
+		Tables: []*scene.Table{{Name: "table", Title: "True lengths of D", Rows: [][]string{{"No.", "from seam", "true length mm"}, {"1", "0.00°", "286.4"}, {"2", "30.00°", "286.4"}, {"3", "60.00°", "286.4"}, {"a", "73.05°", "286.4"}, {"4", "90°", "251.9"}}}},
+	}
 	sheet, problems := Compose(&scene.Scene{}, b)
 	for _, p := range problems {
 		t.Log(p)
 	}
 	keep(t, sheet)
+	b.ThirdAngle, b.Name, b.Size = true, "hood3", "A3"
+	sheet, _ = Compose(&scene.Scene{}, b)
+	keep(t, sheet)
+}
+
+func TestGenerators(t *testing.T) {
+	h := rainHood(t)
+	front := elevation("front", subjects("B", h.B), "generators", "numbers", "projectors")
+	top := plan("top", subjects("B", h.B), front, "generators", "numbers")
+	b := &scene.Block{Form: "sheet", Name: "gens", Title: "Rain hood, the lines", Size: "A2", Titles: &scene.Titles{},
+		Views: []*scene.View{front, top, pattern("flat", h.D, "generators", "numbers")}}
+	sheet, problems := Compose(&scene.Scene{}, b)
+	for _, p := range problems {
+		t.Log(p)
+	}
+	keep(t, sheet)
+	pipe := frustumAt("C", vec.V3{}, vec.V3{Z: 1}, 75, 75, 300)
+	roof := planeAlong("roof", vec.V3{Z: 120}, vec.V3{X: 1, Z: 0.7}, vec.V3{Y: 1})
+	q := partOf(t, "Q", pipe, roof, false)
+	front = elevation("front", subjects("Q", q), "generators", "numbers", "projectors")
+	top = plan("top", subjects("Q", q), front, "generators", "numbers")
+	b = &scene.Block{Form: "sheet", Name: "pipe", Title: "Pipe through a roof", Size: "A3", Titles: &scene.Titles{},
+		Views: []*scene.View{front, top, pattern("flat", patternOf(t, "D", q, 0, 12, true), "generators", "numbers")}}
+	sheet, problems = Compose(&scene.Scene{}, b)
+	for _, p := range problems {
+		t.Log(p)
+	}
+	keep(t, sheet)
+}
+
+func TestAuxiliary(t *testing.T) {
+	pipe := frustumAt("C", vec.V3{}, vec.V3{Z: 1}, 75, 75, 300)
+	roof := planeAlong("roof", vec.V3{Z: 120}, vec.V3{X: 1, Z: 0.7}, vec.V3{Y: 1})
+	q := partOf(t, "Q", pipe, roof, false)
+	for _, third := range []bool{false, true} {
+		front := elevation("front", subjects("Q", q))
+		top := plan("top", subjects("Q", q), front)
+		aux := &scene.View{Form: "view", Name: "A", Along: roof.F.Z.Neg(), Of: front.Of, From: front, Show: shown("projectors")}
+		left := &scene.View{Form: "elevation", Name: "left", Along: vec.V3{X: 1}, Of: front.Of, From: front, Show: shown()}
+		rear := &scene.View{Form: "elevation", Name: "rear", Along: vec.V3{Y: -1}, Of: front.Of, From: left, Show: shown()}
+		b := &scene.Block{Form: "sheet", Name: "aux1", Title: "Auxiliary view", Size: "A2", Titles: &scene.Titles{}, ThirdAngle: third,
+			Views: []*scene.View{front, top, aux, left, rear}}
+		if third {
+			b.Name = "aux3"
+		}
+		sheet, problems := Compose(&scene.Scene{}, b)
+		for _, p := range problems {
+			t.Log(p)
+		}
+		keep(t, sheet)
+		b.Form, b.Width, b.Name = "figure", 160, b.Name+"fig"
+		sheet, problems = Compose(&scene.Scene{}, b)
+		for _, p := range problems {
+			t.Log(p)
+		}
+		keep(t, sheet)
+	}
 }

@@ -16,7 +16,7 @@ import (
 
 // drawPattern draws a development.
 func (p *picture) drawPattern(name string, d *scene.Development) {
-	p.bars = true
+	p.bars, p.flat = true, d
 	count := map[string]int{}
 	for _, loop := range d.Loops {
 		for _, piece := range loop {
@@ -157,17 +157,32 @@ func (p *picture) addFaceSigns(name string, d *scene.Development) {
 	}
 	for i := 1; i < len(even); i++ {
 		a, b := widest(even[i-1]), widest(even[i])
-		const share = 0.62 // toward the wide end of a cone, clear of numbers and of the middle
-		pa, pb := a.Low.Along(a.High.Sub(a.Low), share), b.Low.Along(b.High.Sub(b.Low), share)
 		dir := a.High.Sub(a.Low).Add(b.High.Sub(b.Low)).Unit()
 		length := min(a.Hi-a.Lo, b.Hi-b.Lo)
-		p.faces = append(p.faces, sign{key: p.key(name, "side"), mid: pa.Along(pb.Sub(pa), 0.5), dir: readable(dir),
-			room: length * 2 * (1 - share), tall: math.Abs(pb.Sub(pa).Cross(dir)), text: words})
+		for _, share := range faceShares() {
+			pa, pb := a.Low.Along(a.High.Sub(a.Low), share), b.Low.Along(b.High.Sub(b.Low), share)
+			p.faces = append(p.faces, sign{key: p.key(name, "side"), mid: pa.Along(pb.Sub(pa), 0.5), dir: readable(dir),
+				room: length * 2 * (1 - share), tall: math.Abs(pb.Sub(pa).Cross(dir)), text: words, atSeam: i == 1 || i == len(even)-1})
+		}
 	}
 	sort.SliceStable(p.faces, func(i, j int) bool {
-		return math.Abs(p.faces[i].dir.Y) < math.Abs(p.faces[j].dir.Y)-sameLine
+		return p.faces[i].awkward() < p.faces[j].awkward()-sameLine
 	})
 }
+
+// awkward is the slope of the lettering, and a little more beside a seam, where
+// the seam's own word stands.
+func (s sign) awkward() float64 {
+	const beside = 0.25
+	if s.atSeam {
+		return math.Abs(s.dir.Y) + beside
+	}
+	return math.Abs(s.dir.Y)
+}
+
+// faceShares are the places along a generator, from the narrow end of a cone,
+// at which the words may be centred.
+func faceShares() []float64 { return []float64{0.6, 0.68, 0.76} }
 
 // widest is the longest span of a station.
 func widest(s flat.Station) flat.Span {

@@ -21,6 +21,7 @@ type picture struct {
 	rel     relation
 	toward  vec.V2 // the direction from the parent in which it is put; zero when it stands free
 	solids  []solid
+	flat    *scene.Development // of a pattern
 	strokes []stroke
 	spots   []spot
 	tags    []tag
@@ -33,6 +34,7 @@ type picture struct {
 	labels  []*scene.Label
 	caption []string
 	size    vec.V2   // width and height of all lines, view mm
+	rays    []vec.V2 // the directions in which projectors run
 	beside  []vec.V2 // the directions in which views in projection stand
 }
 
@@ -89,7 +91,9 @@ type sign struct {
 	side float64 // 0: centred on the line; +1, -1: beside it, to the left or right of dir
 	room float64 // length free for it, view mm
 	tall float64 // room across, view mm; 0: any
-	text string
+	// atSeam tells that the place is between a seam and its neighbour.
+	atSeam bool
+	text   string
 }
 
 // bodies are the solids of the picture as geometry wants them.
@@ -128,6 +132,16 @@ func segment(a, b vec.V2) track {
 
 // flatten drops a point of space on to the view.
 func (p *picture) flatten(q vec.V3) vec.V2 { return p.frame.Flat(q) }
+
+// locate is where a point of space lies in the view; on a pattern where it comes
+// to lie, false when it does not lie on the face that is unrolled.
+func (p *picture) locate(q vec.V3) (vec.V2, bool) {
+	if p.flat == nil {
+		return p.flatten(q), true
+	}
+	at, err := p.flat.Flat(q)
+	return at, err == nil
+}
 
 // drawnBox is the box in view mm of the strokes whose role satisfies which.
 func (p *picture) drawnBox(which func(drawing.Role) bool) drawing.Box {

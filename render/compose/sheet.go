@@ -219,16 +219,26 @@ func (j *job) reportFull(p furniture.Paper, sets [][]*picture) {
 	j.report(Problem{Span: j.block.Span, Code: SheetFull, Text: text, Reason: strings.Join(would, "; "), Fatal: true})
 }
 
-// excess tells by how much: of the widest thing that is too large alone, or of
-// the area of all together.
+// excess tells by how much: of the views that stand in projection and are too
+// large together, or of the area of all.
 func (j *job) excess(p furniture.Paper, scale float64, set []*picture) string {
-	s, area := p.Space(), 0.0
-	for _, d := range j.drafts(set, scale) {
-		b := d.room.box()
-		if over := max(b.Width()-s.Width(), b.Height()-s.Height()); over > 0 {
-			return fmt.Sprintf(": %s alone takes %.0f by %.0f mm, %.0f mm more than the drawing space", d.p.name, b.Width(), b.Height(), over)
+	a := &attempt{scale: scale, drafts: j.drafts(set, scale), extras: j.extras(scale, noteWidths()[0])}
+	s, area := p.Space(), furniture.BlockWidth*furniture.BlockHeight
+	l := j.layoutOf(a, s, nil)
+	for _, r := range l.roots() {
+		members := l.clusterOf(r)
+		var names []string
+		for _, m := range members {
+			if m < len(a.drafts) {
+				names = append(names, a.drafts[m].p.name)
+			}
+			area += l.items[m].room.area()
 		}
-		area += d.room.area()
+		b := l.clusterRoom(r).box()
+		if over := max(b.Width()-s.Width(), b.Height()-s.Height()) + 2*leastEdge; over > 0 && len(names) > 0 {
+			return fmt.Sprintf(": %s with all that belongs there needs %.0f by %.0f mm, %.0f mm more than the drawing space of %.0f by %.0f mm",
+				listed(names), b.Width(), b.Height(), over, s.Width(), s.Height())
+		}
 	}
-	return fmt.Sprintf(": they take %.0f %% of the drawing space without the room between them", 100*area/(s.Width()*s.Height()))
+	return fmt.Sprintf(": their areas alone come to %.0f %% of the drawing space", 100*area/(s.Width()*s.Height()))
 }

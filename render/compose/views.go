@@ -85,6 +85,10 @@ func (j *job) foldFrom(p, parent *picture, stand bool) {
 	p.toward = side(u, rel, j.block.ThirdAngle)
 	p.beside = append(p.beside, p.toward.Scale(-1))
 	parent.beside = append(parent.beside, p.toward)
+	if rel == folded && (p.shows("projectors") || parent.shows("projectors")) {
+		p.rays = append(p.rays, p.toward.Scale(-1))
+		parent.rays = append(parent.rays, p.toward)
+	}
 }
 
 // fill draws what the view is of.
