@@ -8,6 +8,7 @@ import (
 	"epure/geom/vec"
 	"epure/render/drawing"
 	"epure/render/pdf"
+	"epure/render/png"
 	"epure/render/svg"
 )
 
@@ -95,5 +96,8 @@ func TestDemoIsWritten(t *testing.T) {
 	if dir := os.Getenv("EPURE_LOOK"); dir != "" {
 		os.WriteFile(dir+"/demo.svg", s, 0o644)
 		os.WriteFile(dir+"/demo.pdf", p, 0o644)
+		if img, err := png.Write(demo(), 150); err == nil {
+			os.WriteFile(dir+"/demo.png", img, 0o644)
+		}
 	}
 }
