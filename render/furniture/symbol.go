@@ -21,7 +21,7 @@ const (
 // of a frustum with ends h and 2h and length 2h (proportions from memory). Its
 // small end points left. The view from the left stands at the right in first
 // angle and at the left in third angle. The box is 5h + 2o wide and 2h + 2o high
-// with the overhang o of the centre lines.
+// with the overhang o of the centre lines; its stroke is h/10.
 func Symbol(p Projection, centre vec.V2, h float64, g drawing.Group) []drawing.Mark {
 	frustum, circles := centre.X-1.5*h, centre.X+1.5*h
 	switch p {
@@ -41,10 +41,11 @@ func Symbol(p Projection, centre vec.V2, h float64, g drawing.Group) []drawing.M
 		return drawing.EllipseArc{C: at(circles, 0, 0), RX: r, RY: r, To: 2 * math.Pi}
 	}
 	o := 1 + SymbolOverhang
+	pen := drawing.Pen{Width: h / 10, Type: drawing.Continuous}
 	return []drawing.Mark{
-		{Key: k("frustum"), Role: drawing.Furniture, Pen: g.Symbol(), Shape: outline},
-		{Key: k("circle/large"), Role: drawing.Furniture, Pen: g.Symbol(), Shape: ring(h)},
-		{Key: k("circle/small"), Role: drawing.Furniture, Pen: g.Symbol(), Shape: ring(h / 2)},
+		{Key: k("frustum"), Role: drawing.Furniture, Pen: pen, Shape: outline},
+		{Key: k("circle/large"), Role: drawing.Furniture, Pen: pen, Shape: ring(h)},
+		{Key: k("circle/small"), Role: drawing.Furniture, Pen: pen, Shape: ring(h / 2)},
 		line(k("axis"), g.Centre(), at(frustum, -o, 0), at(frustum, o, 0)),
 		line(k("centre/level"), g.Centre(), at(circles, -o, 0), at(circles, o, 0)),
 		line(k("centre/upright"), g.Centre(), at(circles, 0, -o), at(circles, 0, o)),

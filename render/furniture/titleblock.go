@@ -86,6 +86,7 @@ func (b TitleBlock) fields() []field {
 const (
 	titleX, titleWidth, titleTop = 46.0, 76.0, 20.0
 	supplementTop                = 8.2
+	titleGap                     = 1.4 // between the title's last baseline and the supplementary title
 )
 
 func (b TitleBlock) sheet() string {
@@ -152,12 +153,12 @@ func (b TitleBlock) title(o vec.V2, g drawing.Group) []drawing.Mark {
 		Pen: drawing.Pen{Width: g.Narrow, Type: drawing.Continuous}, Shape: drawing.BoxAt(p, titleWidth, titleTop).Outline()}}
 	out = append(out, caption(k, "Title", p, titleTop)...)
 	top := titleTop - captionHeight - 2.5*inset
-	foot := supplementTop + 2*inset
-	below, h2 := Fit(b.Supplement, titleWidth-2*inset, supplementTop-2*inset, 2.5)
-	if below == nil {
-		foot = 2 * inset
+	foot := supplementTop + titleGap
+	if strings.TrimSpace(b.Supplement) == "" {
+		foot = footing
 	}
 	lines, h := Fit(b.Title, titleWidth-2*inset, top-foot, 5)
+	below, h2 := Fit(b.Supplement, titleWidth-2*inset, supplementTop-footing, min(2.5, max(h, captionHeight)))
 	out = append(out, column(k, lines, vec.V2{X: p.X + inset, Y: p.Y + top - h}, h, drawing.Start)...)
 	return append(out, column(named(k.Thing, "supplementary title"), below,
 		vec.V2{X: p.X + inset, Y: p.Y + supplementTop - h2}, h2, drawing.Start)...)
