@@ -210,6 +210,10 @@ func (s *scanner) number() (size *big.Rat, whole bool) {
 	start := s.pos
 	s.pos += digitRun(s.text[s.pos:])
 	whole = true
+	if s.groups(start) {
+		size, _ := new(big.Rat).SetString(s.err.Write)
+		return size, true
+	}
 	s.lit.Decimals = 0
 	if s.at('.') {
 		whole = false
@@ -237,6 +241,21 @@ func (s *scanner) number() (size *big.Rat, whole bool) {
 	}
 	size, _ = new(big.Rat).SetString(text)
 	return size, whole
+}
+
+// groups reports digits set in groups, as in 1_000 or 1'000.
+func (s *scanner) groups(start int) bool {
+	end := s.pos
+	for end+1 < len(s.text) && (s.text[end] == '_' || s.text[end] == '\'' && digitRun(s.text[end+1:]) == 3) && isDigit(s.text[end+1]) {
+		end += 1 + digitRun(s.text[end+1:])
+	}
+	if end == s.pos || end-start > maxFigures {
+		return false
+	}
+	s.pos = end
+	plain := strings.NewReplacer("_", "", "'", "").Replace(s.text[start:end])
+	s.fail(BadNumber, start, end, "the digits of a number are written without groups", "", plain)
+	return s.err.Write == plain
 }
 
 // exponent reads e, a sign and digits; ok is false when it is out of range.
@@ -281,9 +300,10 @@ func (s *scanner) slope(rise *big.Rat) {
 	}
 	s.lit.Unit = Slope
 	s.lit.Value = fromOwnRat(Ratio, new(big.Rat).Quo(rise, run))
-	if word := s.word(s.pos); word != "" {
-		s.fail(UnknownUnit, s.pos, s.pos+len(word), "a ratio has no unit", "`1:2` is two plain numbers", "")
-		s.pos += len(word)
+	at := s.pos + s.blanks(s.pos)
+	if word, _, ok := s.unitAt(at); ok || word != "" && at == s.pos {
+		s.pos = at + len(word)
+		s.fail(UnknownUnit, at, s.pos, "a ratio has no unit", "`1:2` is two plain numbers", "")
 	}
 }
 

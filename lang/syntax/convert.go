@@ -1,6 +1,8 @@
 package syntax
 
 import (
+	"strings"
+
 	"github.com/alecthomas/participle/v2/lexer"
 
 	"epure/lang/diag"
@@ -97,10 +99,15 @@ func (c *converter) thing(r *rowThing, end int) *Thing {
 	return &Thing{At: c.span(form.At.Start, end), Form: form, Text: c.textOrNil(r.Text), Clauses: c.clauses(r.Clauses)}
 }
 
+// clauses converts clauses. The step of a hole is none; it is left out.
 func (c *converter) clauses(rows []*rowClause) []Clause {
 	var out []Clause
 	for _, r := range rows {
 		cl := Clause{Word: c.ident(r.Word)}
+		if cl.Word.Text == "nearest" {
+			c.add(c.onlyInHoles(cl.Word.At))
+			continue
+		}
 		for _, e := range r.Exprs {
 			cl.Values = append(cl.Values, c.expr(e))
 		}
@@ -191,14 +198,17 @@ func (c *converter) powerOfQuantity(b *Binary) {
 	d := diag.Warn("power-of-quantity", b.At, "the power takes the number with it")
 	if e, ok := b.Right.(*Quantity); ok {
 		if v, err := quantity.Pow(q.Literal.Value, e.Literal.Value); err == nil {
-			d.Reason = "`" + b.At.Text() + "` is " + quantity.Format(v)
+			d.Reason = source.Quote(b.At.Text()) + " is " + quantity.Format(v)
 		}
-		if number := b.Right.Span().Text(); (number == "2" || number == "3") && q.Literal.Value.Kind() == quantity.Length {
-			raised := map[string]string{"2": "²", "3": "³"}[number]
-			d = d.WithLabelledFix(b.At, q.At.Text()+raised, "write `"+q.At.Text()+raised+"` for so many "+q.Literal.Unit.String()+raised)
+		raised := strings.NewReplacer("2", "²", "3", "³").Replace(e.At.Text())
+		if q.Literal.Value.Kind() == quantity.Length && (raised == "²" || raised == "³") {
+			unit := q.At.Text() + raised
+			d = d.WithLabelledFix(b.At, unit, "write `"+unit+"` for so many "+q.Literal.Unit.String()+raised)
 		}
 	}
-	c.add(d.WithLabelledFix(q.At, "("+q.At.Text()+")", "write `("+q.At.Text()+")` if that is meant"))
+	meant := "(" + q.At.Text() + ")"
+	rest := c.src[q.At.End:b.At.End]
+	c.add(d.WithLabelledFix(q.At, meant, "write `"+meant+rest+"` if that is meant"))
 }
 
 // operand converts an operand with what follows it; the minus is left to expr.

@@ -1,6 +1,9 @@
 package syntax
 
 import (
+	"strings"
+
+	"epure/lang/diag"
 	"epure/lang/source"
 )
 
@@ -11,6 +14,9 @@ import (
 // explain reports why the row of tokens fails at an index, which is their number
 // when the row stops too early.
 func (c *converter) explain(failed int) {
+	if c.openHole(failed) {
+		return
+	}
 	if failed == 0 {
 		c.badStart()
 		return
@@ -27,6 +33,22 @@ func (c *converter) explain(failed int) {
 	default:
 		c.leftOver(failed)
 	}
+}
+
+// openHole reports a text before an index in which a hole is not closed: a quote
+// inside the hole has ended the text, and what follows makes no sense.
+func (c *converter) openHole(failed int) bool {
+	for _, t := range c.row[:failed] {
+		if t.kind != kindText {
+			continue
+		}
+		inner := c.src[t.start+t.open : t.end-t.shut]
+		if n := strings.LastIndexByte(inner, '{'); n >= 0 && !strings.Contains(inner[n:], "}") && (n == 0 || inner[n-1] != '\\') {
+			c.holeNotClosed(t.start + t.open + n)
+			return true
+		}
+	}
+	return false
 }
 
 // tokenAt returns the token at an index; past the end, an empty one after the last.
@@ -49,10 +71,12 @@ func (c *converter) badStart() {
 			Because("a value begins with a number, a name, a text, `(` or `-`"))
 		return
 	}
-	switch t.kind {
-	case kindWord:
+	switch {
+	case t.kind == kindWord && c.tokenAt(1).is("="):
+		c.add(c.error("reserved-word", t.start, t.end, "%s is a word of the language and cannot be a name", c.quote(t)))
+	case t.kind == kindWord:
 		c.add(c.error("reserved-word", t.start, t.end, "%s is a word of the language and begins no statement", c.quote(t)).
-			Because("it stands before the value of a clause; names are other words"))
+			Because("it stands before the value of a clause"))
 	default:
 		c.add(c.error("bad-statement", t.start, t.end, "%s begins no statement", c.quote(t)).
 			Because("a statement begins with a name, a form, or one of given, verify, take, case"))
@@ -113,9 +137,8 @@ func (c *converter) misplaced(failed int) bool {
 	switch {
 	case t.kind == kindKeyword:
 		d.Text = c.quote(t) + " begins a statement and stands first in its line"
-	case t.is("nearest"):
-		d.Text = "`nearest` stands only in the holes of texts"
-		d.Reason = "elsewhere `round(x, step)` rounds"
+	case t.is("nearest") && c.what != "hole":
+		d = c.onlyInHoles(d.Span)
 	case t.is("=") && before.kind == kindName && c.what == "statement" && c.wantsValue(failed):
 		d.Code, d.Text = "misplaced-equals", "a clause takes its value without `=`"
 		d = d.WithFix(d.Span, "")
@@ -134,6 +157,12 @@ func (c *converter) misplaced(failed int) bool {
 	}
 	c.add(d)
 	return true
+}
+
+// onlyInHoles makes the diagnostic of nearest anywhere else.
+func (c *converter) onlyInHoles(at source.Span) diag.Diagnostic {
+	return diag.New("bad-statement", at, "`nearest` stands only in the holes of texts").
+		Because("elsewhere `round(x, step)` rounds")
 }
 
 // definesOther says whether what stands before the = at an index would be a value
@@ -187,13 +216,14 @@ func (c *converter) missingValue(failed int) {
 		what, reason = "the name of a measure or a part is missing after the dot", "for example `K.slant`"
 	case before.is("(") && t.is(")"):
 		what, reason = "these brackets are empty", ""
+	case before.is("nearest") || before.is("within") && c.row[0].is("verify"):
 	case before.kind == kindName || before.kind == kindWord && failed > 1:
 		what = "the clause " + c.quote(before) + " has no value"
 	}
 	switch {
 	case t.kind == kindWord:
 		reason = c.quote(t) + " is a word of the language and never a name"
-	case t.kind == kindSign && reason == "":
+	case t.kind == kindSign && reason == "" && !(before.is("(") && t.is(")")):
 		reason = c.quote(t) + " begins no value"
 	}
 	c.add(c.error("missing-value", t.start, t.end, "%s", what).Because(reason))
@@ -224,12 +254,25 @@ func (c *converter) leftOver(failed int) {
 	case c.row[0].is("verify"), c.row[0].is("take"), c.row[0].is("case"), c.what == "expression":
 		d.Code, d.Text = "bad-statement", c.quote(t)+" is one too many"
 		d.Reason = c.shape()
+	case failed > 1 && before.kind == kindName && c.row[failed-2].is(","):
+		comma := c.row[failed-2]
+		d.Reason = "a comma goes on with the values of a clause; the next clause needs none"
+		d = d.WithFix(c.span(comma.start, comma.end), "")
+	case before.kind == kindQuantity && t.kind == kindQuantity && c.isGroup(t):
+		d.Reason = "the digits of a number are written without blanks"
+		d = d.WithLabelledFix(c.span(before.end, t.start), "", "leave out the blank")
 	case before.kind == kindText && t.kind == kindText:
 		d.Reason = "a form has one text"
 	default:
 		d.Reason = "an operator, a comma or a clause word is missing"
 	}
 	c.add(d)
+}
+
+// isGroup says whether a quantity begins with three digits, as thousands do.
+func (c *converter) isGroup(t token) bool {
+	n := len(t.text) - len(strings.TrimLeft(t.text, "0123456789"))
+	return n == 3
 }
 
 // compares says whether there is a comparison before an index.

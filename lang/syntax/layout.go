@@ -63,7 +63,7 @@ func (l *layout) line(i int) int {
 	s := l.statement(l.tokens[i:end])
 	l.top().add(s, first.column)
 	switch {
-	case end < len(l.tokens) && l.tokens[end].kind == kindOpen:
+	case end < len(l.tokens) && l.tokens[end].kind == kindOpen && !l.tokens[end].first:
 		l.push(s, l.tokens[end], first.column, false)
 		return l.afterBrace(end)
 	case missing:

@@ -34,7 +34,7 @@ func literalCode(p quantity.Problem) diag.Code {
 // digit.
 func (l *scanner) sign(b byte) {
 	start := l.pos
-	if l.slips() {
+	if l.slips() || b == '.' && l.bareDecimal() {
 		return
 	}
 	l.pos++
@@ -86,6 +86,24 @@ func (l *scanner) slips() bool {
 	default:
 		return false
 	}
+	return true
+}
+
+// bareDecimal reads .5, unless the dot follows a name or a bracket.
+func (l *scanner) bareDecimal() bool {
+	digit := l.pos+1 < l.end && '0' <= l.src[l.pos+1] && l.src[l.pos+1] <= '9'
+	if n := len(l.out.tokens); !digit || n > 0 && l.out.tokens[n-1].end == l.pos && (l.out.tokens[n-1].kind == kindName || l.out.tokens[n-1].is(")")) {
+		return false
+	}
+	start := l.pos
+	lit, n, err := quantity.Scan("0" + l.src[l.pos:min(l.lineEnd(), l.pos+maxLiteral)])
+	l.pos += n - 1
+	l.add(l.error("bad-number", start, l.pos, "a digit is missing before the point").WithFix(l.span(start, l.pos), "0"+l.src[start:l.pos]))
+	if err != nil {
+		l.bad(start)
+		return true
+	}
+	l.putLiteral(lit, start)
 	return true
 }
 
@@ -176,7 +194,7 @@ func (l *scanner) junk(start int) {
 // lookAlike reads a rune that stands for a sign of the language.
 func (l *scanner) lookAlike(r rune, size int) bool {
 	if right := alike(r); right != "" {
-		l.mean(l.src[l.pos:l.pos+size], right, "look-alike", fmt.Sprintf("`%c` is not `%s`", r, right))
+		l.mean(l.src[l.pos:l.pos+size], right, "look-alike", fmt.Sprintf("`%c` is not a sign of the language", r))
 		switch right {
 		case "(":
 			l.depth++

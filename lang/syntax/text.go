@@ -89,8 +89,7 @@ func (c *converter) escape(b *strings.Builder, i, end int) int {
 func (c *converter) hole(i, end int) (*Hole, int) {
 	n := strings.IndexByte(c.src[i:end], '}')
 	if n < 0 {
-		c.add(c.error("bad-hole", i, i+1, "this hole is not closed").
-			Because("an expression stands between `{` and `}` and has no quotes in it; `\\{` stands for a brace"))
+		c.holeNotClosed(i)
 		return nil, end
 	}
 	shut := i + n
@@ -115,4 +114,9 @@ func (c *converter) hole(i, end int) (*Hole, int) {
 		hole.Nearest = h.expr(row.Nearest)
 	}
 	return hole, shut + 1
+}
+
+func (c *converter) holeNotClosed(at int) {
+	c.add(c.error("bad-hole", at, at+1, "this hole is not closed").
+		Because("an expression stands between `{` and `}` and has no quotes in it; `\\{` stands for a brace"))
 }
