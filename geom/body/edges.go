@@ -28,7 +28,7 @@ func (b *Body) allEdges() []Edge {
 
 // meeting is the curves in which the surfaces of the faces i and j meet. Two
 // curved faces have none here: a body has one.
-func (b *Body) meeting(i, j int) []curve.Curve {
+func (b *Body) meeting(i, j int) []curve.Arc {
 	p, isPlane := b.Faces[i].Surface.(surface.Plane)
 	q, other := b.Faces[j].Surface.(surface.Plane)
 	switch {
@@ -43,12 +43,12 @@ func (b *Body) meeting(i, j int) []curve.Curve {
 }
 
 // trace is the curves of the plane p on the curved face i.
-func (b *Body) trace(p surface.Plane, i int) []curve.Curve {
+func (b *Body) trace(p surface.Plane, i int) []curve.Arc {
 	s, ok := b.Faces[i].Surface.(surface.Traced)
 	if !ok {
 		return nil
 	}
-	return s.Trace(p, b.touch(p)).Curves()
+	return s.Arcs(p, b.touch(p), b.middle, b.size)
 }
 
 // touch is the distance under which the plane p goes through an apex or touches
@@ -63,7 +63,7 @@ func Touch(p surface.Plane, size float64, middle vec.V3) float64 {
 
 // twoPlanes is the line in which two planes meet, with its origin near p; none
 // when they are parallel within the rounding of their normals.
-func twoPlanes(a, b surface.Plane, p vec.V3) []curve.Curve {
+func twoPlanes(a, b surface.Plane, p vec.V3) []curve.Arc {
 	d := a.F.Z.Cross(b.F.Z)
 	if d.Len() <= num.Direction {
 		return nil
@@ -72,11 +72,12 @@ func twoPlanes(a, b surface.Plane, p vec.V3) []curve.Curve {
 	o := p.Along(a.F.Z, -a.Value(p))
 	in := u.Cross(a.F.Z) // along plane a, square to the line
 	o = o.Along(in, -b.Value(o)/in.Dot(b.F.Z))
-	return []curve.Curve{{Form: curve.Line, C: o, U: u}}
+	line := curve.Curve{Form: curve.Line, C: o, U: u}
+	return []curve.Arc{{Curve: line, T0: math.Inf(-1), T1: math.Inf(1)}}
 }
 
 // kept is the arcs of the curve c that are edges between the faces i and j.
-func (b *Body) kept(c curve.Curve, i, j int) []curve.Arc {
+func (b *Body) kept(c curve.Arc, i, j int) []curve.Arc {
 	ts := b.splits(c, i, j)
 	var out []curve.Arc
 	for k, a := range spans(c, ts) {
@@ -113,11 +114,11 @@ func closeUp(arcs []curve.Arc) []curve.Arc {
 
 // splits are the parameters at which c meets the faces other than i and j,
 // ascending; of those within rounding of each other only one.
-func (b *Body) splits(c curve.Curve, i, j int) []float64 {
+func (b *Body) splits(c curve.Arc, i, j int) []float64 {
 	var ts []float64
 	for k := range b.Faces {
 		if k != i && k != j {
-			ts = append(ts, b.crossings(c, k, i, j)...)
+			ts = append(ts, b.crossings(c, k)...)
 		}
 	}
 	for _, k := range []int{i, j} {
@@ -134,21 +135,17 @@ func (b *Body) splits(c curve.Curve, i, j int) []float64 {
 			out = append(out, t)
 		}
 	}
-	if n := len(out); n > 1 && c.Form.Periodic() && c.At(out[0]).Dist(c.At(out[n-1])) <= b.gap() {
+	if n := len(out); n > 1 && whole(c) && c.At(out[0]).Dist(c.At(out[n-1])) <= b.gap() {
 		out = out[:n-1]
 	}
 	return out
 }
 
-// crossings are the parameters at which c, a curve of the faces i and j, meets face k.
-func (b *Body) crossings(c curve.Curve, k, i, j int) []float64 {
+// crossings are the parameters at which c meets face k.
+func (b *Body) crossings(c curve.Arc, k int) []float64 {
 	s := b.Faces[k].Surface
 	if p, ok := s.(surface.Plane); ok {
-		lo, hi := math.Inf(-1), math.Inf(1)
-		if c.Form.Periodic() {
-			lo, hi = 0, 2*math.Pi
-		}
-		return curve.Arc{Curve: c, T0: lo, T1: hi}.Cross(p.F.O, p.F.Z, b.gap())
+		return c.Cross(p.F.O, p.F.Z, b.gap())
 	}
 	if c.Form == curve.Line {
 		return s.Roots(c.C, c.U)
@@ -157,21 +154,23 @@ func (b *Body) crossings(c curve.Curve, k, i, j int) []float64 {
 }
 
 // spans are the arcs between neighbouring splits; the whole of a closed curve
-// that has none. Arcs that run to infinity are left out.
-func spans(c curve.Curve, ts []float64) []curve.Arc {
-	turn := 2 * math.Pi
-	if c.Form.Periodic() {
+// that has none. Ends that run to infinity or very far away are left out.
+func spans(c curve.Arc, ts []float64) []curve.Arc {
+	if whole(c) {
 		if len(ts) == 0 {
-			return []curve.Arc{{Curve: c, T0: 0, T1: turn}}
+			return []curve.Arc{c}
 		}
-		ts = append(ts, ts[0]+turn)
+		ts = append(ts, ts[0]+2*math.Pi)
 	}
 	var out []curve.Arc
 	for k := 1; k < len(ts); k++ {
-		out = append(out, curve.Arc{Curve: c, T0: ts[k-1], T1: ts[k]})
+		out = append(out, curve.Arc{Curve: c.Curve, T0: ts[k-1], T1: ts[k]})
 	}
 	return out
 }
+
+// whole tells whether c is a closed curve.
+func whole(c curve.Arc) bool { return c.Form.Periodic() && c.T1-c.T0 == 2*math.Pi }
 
 // isEdge tells whether the boundary of the body along a is made of the faces i and j.
 func (b *Body) isEdge(a curve.Arc, i, j int) bool {

@@ -49,3 +49,22 @@ func (t tree) sign(of []num.Sign) num.Sign {
 	}
 	return s
 }
+
+// value evaluates the tree over signed distances from the faces.
+func (t tree) value(of func(face int) float64) float64 {
+	switch t.op {
+	case leaf:
+		return of(t.face)
+	case not:
+		return -t.kids[0].value(of)
+	}
+	v := t.kids[0].value(of)
+	for _, k := range t.kids[1:] {
+		if t.op == and {
+			v = max(v, k.value(of))
+		} else {
+			v = min(v, k.value(of))
+		}
+	}
+	return v
+}

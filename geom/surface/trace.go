@@ -51,29 +51,89 @@ type Trace struct {
 // the centre lies within 2^10 latus recta, so that three digits at most are lost.
 const LongConic = 0x1p-10
 
-// Curves are the curves of the trace: none for Nothing and PointOnly, the branch
-// on the surface for a Hyperbola.
-func (t Trace) Curves() []curve.Curve {
-	var out []curve.Curve
+// arcs are the curves of the trace, each whole: the branch on the surface for a Hyperbola.
+func (t Trace) arcs() []curve.Arc {
+	var out []curve.Arc
 	for _, r := range t.Lines {
-		out = append(out, r.Curve())
+		out = append(out, curve.Arc{Curve: r.Curve(), T0: math.Inf(-1), T1: math.Inf(1)})
 	}
+	c, ok := t.Conic()
+	switch {
+	case !ok:
+	case c.Form.Periodic():
+		out = append(out, curve.Arc{Curve: c, T0: 0, T1: 2 * math.Pi})
+	default:
+		out = append(out, curve.Arc{Curve: c, T0: math.Inf(-1), T1: math.Inf(1)})
+	}
+	return out
+}
+
+// Conic is the curve of a circle, ellipse, parabola or hyperbola (its branch on the
+// surface), held by its vertex when it is long.
+func (t Trace) Conic() (curve.Curve, bool) {
 	long := math.Abs(1-t.Ecc*t.Ecc) < LongConic
 	u, w := t.F.X.Scale(t.A), t.F.Y.Scale(t.B)
 	switch {
 	case t.Shape == Circle, t.Shape == Ellipse && !long:
-		out = append(out, curve.Curve{Form: curve.Ellipse, C: t.F.O, U: u, W: w})
+		return curve.Curve{Form: curve.Ellipse, C: t.F.O, U: u, W: w}, true
 	case t.Shape == Ellipse:
-		out = append(out, curve.Curve{Form: curve.EllipseEnd, C: t.Near, U: u, W: w})
-	case t.Shape == Parabola:
-		// y² = 4·f·x with y = t
-		out = append(out, curve.Curve{Form: curve.Parabola, C: t.F.O, U: t.F.Y, W: t.F.X.Scale(1 / (4 * t.A))})
+		return curve.Curve{Form: curve.EllipseEnd, C: t.Near, U: u, W: w}, true
+	case t.Shape == Parabola: // y² = 4·f·x with y = t
+		return curve.Curve{Form: curve.Parabola, C: t.F.O, U: t.F.Y, W: t.F.X.Scale(1 / (4 * t.A))}, true
 	case t.Shape == Hyperbola && !long:
-		out = append(out, curve.Curve{Form: curve.Hyperbola, C: t.F.O, U: u, W: w})
+		return curve.Curve{Form: curve.Hyperbola, C: t.F.O, U: u, W: w}, true
 	case t.Shape == Hyperbola:
-		out = append(out, curve.Curve{Form: curve.HyperbolaEnd, C: t.Near, U: u, W: w})
+		return curve.Curve{Form: curve.HyperbolaEnd, C: t.Near, U: u, W: w}, true
 	}
-	return out
+	return curve.Curve{}, false
+}
+
+// Arcs are the curves in which p meets the nappe, see Traced.
+func (s Cone) Arcs(p Plane, gap float64, _ vec.V3, _ float64) []curve.Arc {
+	return s.Trace(p, gap).arcs()
+}
+
+// Arcs are the curves in which p meets the cylinder, see Traced. A plane so nearly along the axis that both
+// vertices are far off gives the two sides of its ellipse apart, each held by
+// its point at the level of at.
+func (s Cylinder) Arcs(p Plane, gap float64, at vec.V3, size float64) []curve.Arc {
+	t := s.Trace(p, gap)
+	if t.Shape != Ellipse || 1-t.Ecc*t.Ecc >= LongConic {
+		return t.arcs()
+	}
+	n := p.F.Z
+	cb := n.Dot(s.F.Z)
+	r := n.Along(s.F.Z, -cb).Unit()
+	m := s.F.O.Along(s.F.Z, at.Sub(s.F.O).Dot(s.F.Z))
+	q := p.F.O.Sub(m).Dot(n)
+	rise := s.R * t.Ecc / cb // along the axis for a step of R towards r
+	if near := math.Abs(math.Abs(q/cb) - math.Abs(rise)); near < size/LongConic {
+		end := math.Copysign(1, q) // the vertex nearest to the level of at
+		v := m.Along(r, s.R*end).Along(s.F.Z, q/cb-end*rise)
+		return []curve.Arc{{Curve: s.side(v, r, rise, end, 0), T0: 0, T1: 2 * math.Pi}}
+	}
+	d := q / t.Ecc
+	if math.Abs(d) >= s.R {
+		return nil
+	}
+	half := math.Atan2(math.Sqrt((s.R-d)*(s.R+d)), d)
+	sin, cos := math.Sincos(half)
+	y := s.F.Z.Cross(r)
+	o1, o2 := m.Along(r, d).Along(y, s.R*sin), m.Along(r, d).Along(y, -s.R*sin)
+	return []curve.Arc{
+		{Curve: s.side(o1, r, rise, cos, sin), T0: -half, T1: math.Pi - half},
+		{Curve: s.side(o2, r, rise, cos, -sin), T0: half - math.Pi, T1: half},
+	}
+}
+
+// side is the ellipse through its point o at the angle (cos, sin) about the axis from r.
+func (s Cylinder) side(o, r vec.V3, rise, cos, sin float64) curve.Curve {
+	y := s.F.Z.Cross(r)
+	return curve.Curve{
+		Form: curve.EllipseEnd, C: o,
+		U: r.Scale(-s.R*cos).Along(y, -s.R*sin).Along(s.F.Z, rise*cos),
+		W: r.Scale(-s.R*sin).Along(y, s.R*cos).Along(s.F.Z, rise*sin),
+	}
 }
 
 // Trace returns what p has in common with the cylinder; a plane along the axis
@@ -222,7 +282,12 @@ func (s Cone) throughApex(n vec.V3, b Tilt) Trace {
 // Traced is a surface that knows its trace in a plane.
 type Traced interface {
 	Ruled
+	// Trace is what p has in common with the surface; gap is the distance, mm,
+	// within which it passes an apex or touches.
 	Trace(p Plane, gap float64) Trace
+	// Arcs are the curves of the trace, whole but for parts that lie very far
+	// from the sphere of the radius size about at, where they are wanted to the last digits.
+	Arcs(p Plane, gap float64, at vec.V3, size float64) []curve.Arc
 }
 
 var _, _ Traced = Cylinder{}, Cone{}
