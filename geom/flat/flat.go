@@ -104,9 +104,9 @@ func Of(b *body.Body, i int, o Options) (*Pattern, error) {
 	return p, nil
 }
 
-// Count is the number of pieces of material: one face is unrolled in one
-// piece, even when the seam leaves separate regions of it.
-func (p *Pattern) Count() int { return 1 }
+// Count is the number of pieces of material that the pattern falls into: one,
+// or more when the seam runs through a part that is cut away elsewhere.
+func (p *Pattern) Count() int { return len(p.Loops) }
 
 // Flat returns where the point q of the face lies on the pattern; a point of
 // the seam where phi is zero, if there is material. It fails with *OffError

@@ -104,15 +104,13 @@ func (p profile) turns() []float64 {
 	return []float64{wrap(a), wrap(a + math.Pi)}
 }
 
-// within returns those of the angles, moved by whole turns, that lie in (a, b).
+// within returns those of the angles, moved by whole turns, that lie in [a, b].
 func within(angles []float64, a, b float64) []float64 {
 	var in []float64
 	for _, t := range angles {
 		t += turn * math.Ceil((a-t)/turn)
-		for ; t < b; t += turn {
-			if t > a {
-				in = append(in, t)
-			}
+		for ; t <= b; t += turn {
+			in = append(in, t)
 		}
 	}
 	return in

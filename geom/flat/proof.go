@@ -68,7 +68,7 @@ func (p *Pattern) areaFlat() float64 {
 func (p *Pattern) areaSpace() float64 {
 	sum := 0.0
 	for _, m := range p.rims {
-		a := integral(p.roll.swept(m.arc), m.arc.T0, m.arc.T1)
+		a := p.roll.swept(m.arc)
 		if !m.upper {
 			a = 0 - a
 		}
@@ -77,18 +77,19 @@ func (p *Pattern) areaSpace() float64 {
 	return sum
 }
 
-// swept is the rate at which the generator from the apex, or from the level of
-// a cylinder's origin, to the point of the arc sweeps the surface: half of
-// |X × dX| about a cone's apex, height times radius times angle on a cylinder.
-func (r roll) swept(a curve.Arc) func(t float64) float64 {
-	return func(t float64) float64 {
-		x := a.At(t).Sub(r.f.O)
-		area := x.Cross(a.Deriv(t, 1))
-		if r.cone {
-			return area.Len() / 2
-		}
-		return x.Dot(r.f.Z) * math.Abs(area.Dot(r.f.Z)) / r.r
+// swept is the area of the surface that the generator sweeps between the apex
+// and the arc, or between the level of a cylinder's origin and the arc. Every
+// element of a cone appears along the axis in the ratio of the sine of the half
+// angle, so a cone's is what the arc sweeps in the plan, in closed form; a
+// cylinder's is height times radius times angle, and negative below the origin.
+func (r roll) swept(a curve.Arc) float64 {
+	if r.cone {
+		return math.Abs(a.Sweep(r.f.O).Dot(r.f.Z)) / r.sin
 	}
+	return integral(func(t float64) float64 {
+		x := a.At(t).Sub(r.f.O)
+		return x.Dot(r.f.Z) * math.Abs(x.Cross(a.Deriv(t, 1)).Dot(r.f.Z)) / r.r
+	}, a.T0, a.T1)
 }
 
 // edgeProofs compares the length of every edge, pieces of one other face together.
@@ -105,7 +106,7 @@ func (p *Pattern) edgeProofs() []EdgeProof {
 		}
 		for _, m := range p.rims {
 			if m.face == j {
-				e.Space += integral(func(t float64) float64 { return m.arc.Deriv(t, 1).Len() }, m.arc.T0, m.arc.T1)
+				e.Space += m.arc.Length()
 			}
 		}
 		for _, w := range p.walls {

@@ -104,12 +104,18 @@ func (p *Pattern) corners() []reason {
 		out = append(out, reason{w.phi, "edge"})
 	}
 	for i, q := range p.panels {
-		prev := p.panels[(i+len(p.panels)-1)%len(p.panels)]
-		if !p.alike(prev.spans, q.spans) && !slices.ContainsFunc(p.walls, func(w wall) bool { return w.at(q.a) }) {
+		if p.isBreak(i) && !slices.ContainsFunc(p.walls, func(w wall) bool { return w.at(q.a) }) {
 			out = append(out, reason{q.a, "corner"})
 		}
 	}
 	return out
+}
+
+// isBreak tells whether other faces bound the panel i than the one before it:
+// always, but for the first panel when the seam runs through smooth edges.
+func (p *Pattern) isBreak(i int) bool {
+	n := len(p.panels)
+	return !p.alike(p.panels[(i+n-1)%n].spans, p.panels[i%n].spans)
 }
 
 // alike tells whether the same faces bound the bands.
@@ -151,13 +157,20 @@ func (m rim) extremes() []float64 {
 }
 
 // longest returns the generators with the greatest and the least length in the
-// part; none when all are equally long. Candidates are the ends of the panels,
-// the extremes of the edges, and the extremes of the length between two edges.
+// part; none when all are equally long. Candidates are the corners, the
+// extremes of the edges, and those of the length between two edges.
 func (p *Pattern) longest() []reason {
 	var at []float64
-	for _, q := range p.panels {
-		if len(q.spans) > 0 {
-			at = append(at, p.lengthTurns(q)...)
+	for i, q := range p.panels {
+		if len(q.spans) == 0 {
+			continue
+		}
+		at = append(at, p.lengthTurns(q)...)
+		if p.isBreak(i) {
+			at = append(at, q.a)
+		}
+		if p.isBreak(i + 1) {
+			at = append(at, q.b)
 		}
 	}
 	size, lo, hi := samePoint*p.size, math.Inf(1), math.Inf(-1)
@@ -192,9 +205,9 @@ const tie = 1e-9
 // six roots in a whole turn.
 const scan = 48
 
-// lengthTurns returns the ends of the panel and the angles in it at which the length of a span is extreme.
+// lengthTurns returns angles of the panel, among them all at which the length of a span is extreme.
 func (p *Pattern) lengthTurns(q panel) []float64 {
-	at := []float64{q.a, q.b}
+	var at []float64
 	for _, b := range q.spans {
 		hi := p.rims[b.hi].profile
 		lo := profile{}
