@@ -168,34 +168,6 @@ func Moved(s Shape, d vec.V2) Shape {
 	return s
 }
 
-// Finite reports whether every number of a shape is finite.
-func Finite(s Shape) bool {
-	switch s := s.(type) {
-	case Text:
-		return finite(s.At.X, s.At.Y, s.Height, s.Angle)
-	case EllipseArc:
-		return finite(s.C.X, s.C.Y, s.RX, s.RY, s.Rot, s.From, s.To)
-	case Path:
-		for _, p := range s.Pieces {
-			if !Finite(p) {
-				return false
-			}
-		}
-		return true
-	}
-	b := Bounds(s) // NaN passes through min and max, infinities stay
-	return b == EmptyBox() || finite(b.Min.X, b.Min.Y, b.Max.X, b.Max.Y)
-}
-
-func finite(xs ...float64) bool {
-	for _, x := range xs {
-		if math.IsNaN(x) || math.IsInf(x, 0) {
-			return false
-		}
-	}
-	return true
-}
-
 // Texts returns the strings of the texts among the marks that are, or are not,
 // bold.
 func Texts(marks []Mark, bold bool) []string {

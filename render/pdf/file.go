@@ -10,6 +10,7 @@ import (
 	"strings"
 	"unicode/utf16"
 
+	"epure/render/drawing"
 	"epure/render/font"
 )
 
@@ -73,11 +74,5 @@ func text(s string) string {
 	return b.String() + ">"
 }
 
-// num writes a number of points with four decimals at most: 35 nanometres.
-func num(x float64) string {
-	s := strings.TrimRight(strings.TrimRight(strconv.FormatFloat(x, 'f', 4, 64), "0"), ".")
-	if s == "-0" || s == "" {
-		return "0"
-	}
-	return s
-}
+// num writes a number of points: 35 nanometres are kept.
+func num(x float64) string { return drawing.Decimal(x) }

@@ -11,7 +11,6 @@
 package pdf
 
 import (
-	"errors"
 	"fmt"
 
 	"epure/render/drawing"
@@ -21,16 +20,11 @@ import (
 // PointsPerMM turns millimetres into the page's unit of 1/72 inch.
 const PointsPerMM = 72 / 25.4
 
-// ErrNotFinite says that a mark has a coordinate that is not a finite number.
-var ErrNotFinite = errors.New("coordinate is not finite")
-
 // Write returns the document. The same sheet gives the same bytes. The only
 // error is a mark with a coordinate that is not finite, named by its key.
 func Write(s drawing.Sheet) ([]byte, error) {
-	for _, m := range s.Marks {
-		if !drawing.Finite(m.Shape) {
-			return nil, fmt.Errorf("pdf: mark %q %q %q: %w", m.Key.View, m.Key.Thing, m.Key.Feature, ErrNotFinite)
-		}
+	if err := drawing.Check(s); err != nil {
+		return nil, fmt.Errorf("pdf: %w", err)
 	}
 	f := &file{}
 	fonts := embed(f, s.Marks)

@@ -199,7 +199,7 @@ func TestOddSheetsStayValid(t *testing.T) {
 
 func TestNotFiniteIsAnError(t *testing.T) {
 	_, err := Write(drawing.Sheet{Marks: []drawing.Mark{{Shape: drawing.Line{B: at(math.NaN(), 0)}}}})
-	if !errors.Is(err, ErrNotFinite) {
+	if !errors.Is(err, drawing.ErrNotFinite) {
 		t.Errorf("error %v", err)
 	}
 }

@@ -23,11 +23,8 @@ import (
 	"epure/render/font"
 )
 
-// The errors of Write.
-var (
-	ErrNotFinite = errors.New("coordinate is not finite")
-	ErrTooLarge  = errors.New("image is too large")
-)
+// ErrTooLarge says that an image would have no or too many pixels.
+var ErrTooLarge = errors.New("image is too large")
 
 // mostPixels bounds an image: A0 at 400 dots an inch takes 248 million.
 const mostPixels = 1 << 28
@@ -36,6 +33,9 @@ const mostPixels = 1 << 28
 // bytes. The errors are a mark with a coordinate that is not finite, and a size
 // that is nothing or over 2^28 pixels.
 func Write(s drawing.Sheet, dpi float64) ([]byte, error) {
+	if err := drawing.Check(s); err != nil {
+		return nil, fmt.Errorf("png: %w", err)
+	}
 	scale := dpi / 25.4
 	w, h := math.Round(s.Width*scale), math.Round(s.Height*scale)
 	if !(w >= 1 && h >= 1 && w*h <= mostPixels) {
@@ -46,9 +46,6 @@ func Write(s drawing.Sheet, dpi float64) ([]byte, error) {
 		c.img.Pix[i] = 255
 	}
 	for _, m := range s.Marks {
-		if !drawing.Finite(m.Shape) {
-			return nil, fmt.Errorf("png: mark %q %q %q: %w", m.Key.View, m.Key.Thing, m.Key.Feature, ErrNotFinite)
-		}
 		c.mark(m)
 	}
 	var b bytes.Buffer

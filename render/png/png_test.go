@@ -130,7 +130,7 @@ func TestImageStatesItsResolution(t *testing.T) {
 }
 
 func TestErrors(t *testing.T) {
-	if _, err := Write(sheet(drawing.Mark{Shape: drawing.Line{A: at(math.Inf(1), 0)}}), dpi); !errors.Is(err, ErrNotFinite) {
+	if _, err := Write(sheet(drawing.Mark{Shape: drawing.Line{A: at(math.Inf(1), 0)}}), dpi); !errors.Is(err, drawing.ErrNotFinite) {
 		t.Error(err)
 	}
 	for _, d := range []float64{0, -1, 1e9, math.NaN(), math.Inf(1)} {

@@ -85,16 +85,8 @@ func grey(g float64) string {
 // escape makes any text fit for XML: control characters out, markup escaped.
 func escape(s string) string { return html.EscapeString(font.Clean(s)) }
 
-// num writes a number with four decimals at most, without trailing zeros and
-// never as -0: a ten-thousandth of a millimetre.
-func num(x float64) string {
-	s := strconv.FormatFloat(x, 'f', 4, 64)
-	s = strings.TrimRight(strings.TrimRight(s, "0"), ".")
-	if s == "-0" || s == "" {
-		return "0"
-	}
-	return s
-}
+// num writes a number of millimetres: a ten-thousandth is kept.
+func num(x float64) string { return drawing.Decimal(x) }
 
 func nums(a []float64) string {
 	var b strings.Builder

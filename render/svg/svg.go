@@ -11,7 +11,6 @@ package svg
 
 import (
 	"encoding/base64"
-	"errors"
 	"fmt"
 	"strings"
 
@@ -24,17 +23,12 @@ type Options struct {
 	Transparent bool // no white paper behind the drawing
 }
 
-// ErrNotFinite says that a mark has a coordinate that is not a finite number.
-var ErrNotFinite = errors.New("coordinate is not finite")
-
 // Write returns the document. The same sheet gives the same bytes. Control
 // characters in texts are dropped. The only error is a mark with a coordinate
 // that is not finite, named by its key.
 func Write(s drawing.Sheet, o Options) ([]byte, error) {
-	for _, m := range s.Marks {
-		if !drawing.Finite(m.Shape) {
-			return nil, fmt.Errorf("svg: mark %q %q %q: %w", m.Key.View, m.Key.Thing, m.Key.Feature, ErrNotFinite)
-		}
+	if err := drawing.Check(s); err != nil {
+		return nil, fmt.Errorf("svg: %w", err)
 	}
 	w := &writer{height: s.Height, ids: newIDs(s.Name), family: "epure-" + prefix(s.Name)}
 	w.head(s, o)

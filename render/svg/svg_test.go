@@ -118,7 +118,7 @@ func TestNotFiniteIsAnError(t *testing.T) {
 				s.(drawing.Spline).Points[2].X = bad
 			}
 			_, err := Write(drawing.Sheet{Marks: []drawing.Mark{{Shape: s}}}, Options{})
-			if !errors.Is(err, ErrNotFinite) {
+			if !errors.Is(err, drawing.ErrNotFinite) {
 				t.Errorf("%v: error %v", s, err)
 			}
 		}
