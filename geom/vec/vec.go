@@ -171,9 +171,8 @@ func AxisFrame(o, axis V3) Frame {
 	if math.Hypot(z.X, z.Y) < LevelSine {
 		return World.At(o)
 	}
-	up := V3{Z: 1}
-	x := up.Along(z, -up.Dot(z)).Unit()
-	return Frame{o, x, z.Cross(x).Unit(), z}
+	y := z.Cross(V3{Z: 1}).Unit() // level, and exact however steep the axis is
+	return Frame{o, y.Cross(z).Unit(), y, z}
 }
 
 // ViewFrame returns the frame of a view in which the eye looks along d (not
