@@ -315,11 +315,12 @@ func (l *layout) drop(members []int, c corner) bool {
 	b, s := e.box(), l.space.Grow(-leastEdge)
 	xs := l.stops(b.Min.X, b.Max.X, s.Min.X, s.Max.X, func(o drawing.Box) (float64, float64) { return o.Min.X, o.Max.X })
 	ys := l.stops(b.Min.Y, b.Max.Y, s.Min.Y, s.Max.Y, func(o drawing.Box) (float64, float64) { return o.Min.Y, o.Max.Y })
+	mine, others := l.rooms(members)
 	best, bestScore := vec.V2{}, math.Inf(1)
 	for _, y := range ys {
 		for _, x := range xs {
 			d := vec.V2{X: x, Y: y}
-			if score := c.distance(b, d, s); score < bestScore-slack && l.free(members, d) {
+			if score := c.distance(b, d, s); score < bestScore-slack && free(mine, others, d) {
 				best, bestScore = d, score
 			}
 		}
@@ -374,17 +375,26 @@ func (l *layout) stops(lo, hi, least, most float64, side func(drawing.Box) (floa
 	return kept
 }
 
-// free reports whether the members, moved by d, are clear of all that is placed.
-func (l *layout) free(members []int, d vec.V2) bool {
+// rooms are the rooms of the members, and of all that they must keep clear of.
+func (l *layout) rooms(members []int) (mine, others []extent) {
 	for _, m := range members {
-		e := l.items[m].here().moved(d)
-		for _, o := range l.blocked {
-			if e.gap(o) < leastGap-slack {
-				return false
-			}
+		mine = append(mine, l.items[m].here())
+	}
+	others = append(others, l.blocked...)
+	for i, t := range l.items {
+		if l.placed[i] {
+			others = append(others, t.here())
 		}
-		for i, t := range l.items {
-			if l.placed[i] && e.gap(t.here()) < leastGap-slack {
+	}
+	return mine, others
+}
+
+// free reports whether rooms, moved by d, are clear of others.
+func free(mine, others []extent, d vec.V2) bool {
+	for _, m := range mine {
+		e := m.moved(d)
+		for i := range others {
+			if !e.clears(&others[i], leastGap-slack) {
 				return false
 			}
 		}

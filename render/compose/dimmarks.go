@@ -95,10 +95,49 @@ func (d *draft) leg(v, u vec.V2) float64 {
 	return far
 }
 
-// flatRadius draws a radius about the origin of a pattern.
+// flatRadius draws a radius about the origin of a pattern: between two generators
+// where there is room, else pointed at from outside.
 func (d *draft) flatRadius(m *scene.Dimension, a scene.FlatRadius) {
-	r := furniture.Radius{Radius: a.R * d.scale, Angle: a.At, Text: withSign("R", m.Text)}
-	d.addDimension(r.Marks(d.dimKey(m), d.style()))
+	text := withSign("R", m.Text)
+	var options [][]drawing.Mark
+	angles := append([]float64{a.At}, d.between(a)...)
+	for _, at := range angles {
+		r := furniture.Radius{Radius: a.R * d.scale, Angle: at, Text: text}
+		options = append(options, r.Marks(d.dimKey(m), d.style()))
+	}
+	for _, at := range angles {
+		tip := drawing.Dir(at).Scale(a.R * d.scale)
+		for _, stem := range []float64{9, 13, 18} {
+			l := furniture.Leader{Tip: tip, Elbow: tip.Along(drawing.Dir(at), stem), Text: text}
+			options = append(options, l.Marks(d.dimKey(m), d.style()))
+		}
+	}
+	d.addDimension(d.cheapest(options))
+}
+
+// between are the polar angles half way between neighbouring stations that both
+// reach the radius.
+func (d *draft) between(a scene.FlatRadius) []float64 {
+	if d.p.flat == nil {
+		return nil
+	}
+	var out []float64
+	last := math.NaN()
+	for _, s := range d.p.flat.Stations {
+		angle := math.NaN()
+		for _, x := range s.Spans {
+			for _, q := range [2]vec.V2{x.Low, x.High} {
+				if math.Abs(q.Len()-a.R) <= sameLine*a.R {
+					angle = math.Atan2(q.Y, q.X)
+				}
+			}
+		}
+		if mid := (last + angle) / 2; !math.IsNaN(mid) {
+			out = append(out, mid)
+		}
+		last = angle
+	}
+	return out
 }
 
 // flatAngle draws an angle about the origin of a pattern, outside its outline.

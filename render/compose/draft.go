@@ -55,6 +55,7 @@ func newDraft(p *picture, scale float64, k ink, note string) *draft {
 	d.drawTags()
 	d.nameSpots()
 	d.drawLabels()
+	d.drawSightings()
 	d.room = marksExtent(d.marks)
 	if d.room.empty() {
 		d.room = nothing().with(vec.V2{})
@@ -260,24 +261,36 @@ func (d *draft) drawBars() {
 
 // Distances of captions, paper mm, and of their lines in heights of lettering.
 const (
-	captionGap  = 4
-	linePitch   = 1.6
-	captionBold = true
+	captionGap = 4
+	linePitch  = 1.6
 )
 
-// drawCaption writes the words under the view, centred on its outline.
+// drawCaption writes the words under the view, centred on its outline; over it
+// when projectors leave the view downward.
 func (d *draft) drawCaption(note string) {
 	lines := d.p.caption
 	if note != "" {
 		lines = append(lines[:len(lines):len(lines)], note)
 	}
-	y := d.room.box().Min.Y - captionGap
+	h := d.ink.caption
+	y := d.room.box().Min.Y - captionGap - h
+	if d.raysDown() {
+		y = d.room.box().Max.Y + captionGap + h*linePitch*float64(len(lines)-1)
+	}
 	for i, s := range lines {
-		h := d.ink.caption
-		y -= h
-		t := drawing.Text{At: vec.V2{X: d.core.Centre().X, Y: y}, Height: h, Anchor: drawing.Middle, String: s, Bold: i == 0 && captionBold}
+		t := drawing.Text{At: vec.V2{X: d.core.Centre().X, Y: y}, Height: h, Anchor: drawing.Middle, String: s, Bold: i == 0}
 		d.write(d.p.key("caption", ordinal("line", i+1)), t)
 		d.room = d.room.union(shapeExtent(t))
-		y -= h * (linePitch - 1)
+		y -= h * linePitch
 	}
+}
+
+// raysDown reports whether projectors leave the view downward.
+func (d *draft) raysDown() bool {
+	for _, u := range d.p.rays {
+		if u.Y < 0 {
+			return true
+		}
+	}
+	return false
 }

@@ -81,6 +81,17 @@ func (e extent) gap(o extent) float64 {
 	return g
 }
 
+// clears reports whether the gap to o is at least g. It is gap, stopping at the
+// first direction that will do.
+func (e *extent) clears(o *extent, g float64) bool {
+	for _, i := range [compassSize]int{0, upright, 2, 6, 1, 3, 5, 7} {
+		if e.lo[i]-o.hi[i] >= g || o.lo[i]-e.hi[i] >= g {
+			return true
+		}
+	}
+	return false
+}
+
 // box is the upright rectangle round e.
 func (e extent) box() drawing.Box {
 	return drawing.Box{Min: vec.V2{X: e.lo[0], Y: e.lo[upright]}, Max: vec.V2{X: e.hi[0], Y: e.hi[upright]}}

@@ -69,7 +69,11 @@ func textRoom(t drawing.Text) quadrangle {
 	return quadrangle{c[0], c[1].Sub(c[0]), c[3].Sub(c[0])}
 }
 
-// clear reports what a rectangle would lie on: the number of lines and of words.
+// wordsClear is the least distance of two words more than that of a word and a
+// line, paper mm: without it two numbers in a row read as one.
+const wordsClear = 0.8
+
+// count tells what a rectangle would lie on: the number of lines and of words.
 func (f *field) count(q quadrangle) (lines, words int) {
 	e := nothing()
 	for _, c := range q.corners() {
@@ -84,8 +88,9 @@ func (f *field) count(q quadrangle) (lines, words int) {
 			lines++
 		}
 	}
+	wide := q.grown(wordsClear)
 	for _, w := range f.words {
-		if q.overlaps(w) {
+		if wide.overlaps(w) {
 			words++
 		}
 	}

@@ -15,7 +15,7 @@ import (
 const (
 	figureMargin = 5.0   // round the content, paper mm
 	figureWidest = 190.0 // of a figure without a width: what a page of A4 holds
-	figureTall   = 240.0 // its height, at most, while its scale is open
+	figureTall   = 250.0 // its height, at most, while its scale is open
 )
 
 // figure composes a figure.

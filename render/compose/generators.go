@@ -176,25 +176,30 @@ func without(free [][2]float64, lo, hi, least float64) [][2]float64 {
 	return out
 }
 
-// numberGenerators writes the numbers at the wide ends, outward from the axis.
-// Ends that fall together on paper share one text: "3, 11".
+// numberGenerators writes the numbers at the wide ends, where the generators
+// would run on. Ends that fall together on paper share one text: "3, 11".
 func (p *picture) numberGenerators(s solid, gens []generator) {
 	type end struct {
-		at   vec.V2
-		nums []int
+		at, away vec.V2
+		nums     []int
 	}
 	var ends []end
 	size := s.value.Body.Size()
 next:
 	for _, g := range gens {
-		at := p.flatten(wideEnd(s.value, g.arc))
+		near, far := g.ends(s.value)
+		at := p.flatten(far)
 		for i := range ends {
 			if ends[i].at.Dist(at) <= sameLine*size {
 				ends[i].nums = append(ends[i].nums, g.number)
 				continue next
 			}
 		}
-		ends = append(ends, end{at, []int{g.number}})
+		away := at.Sub(p.flatten(near))
+		if away.Len() <= sameLine*size { // seen end-on: away from the axis
+			away = at.Sub(p.flatten(s.value.Root.Base.O))
+		}
+		ends = append(ends, end{at, away.Unit(), []int{g.number}})
 	}
 	for _, e := range ends {
 		sort.Ints(e.nums)
@@ -202,27 +207,17 @@ next:
 		for _, n := range e.nums {
 			words = append(words, itoa(n))
 		}
-		p.tags = append(p.tags, tag{key: p.key(s.name, ordinal("number", e.nums[0])), at: e.at, away: p.outward(s.value, e.at), text: strings.Join(words, ", "), small: true})
+		p.tags = append(p.tags, tag{key: p.key(s.name, ordinal("number", e.nums[0])), at: e.at, away: e.away, text: strings.Join(words, ", "), small: true})
 	}
 }
 
-// wideEnd is the end of a generator at the base: the one farther from the apex of
-// a cone, the one nearer the base of a cylinder.
-func wideEnd(s *scene.Solid, a curve.Arc) vec.V3 {
+// ends are the ends of a generator, the one at the base last: the one farther
+// from the apex of a cone, the one nearer the base of a cylinder.
+func (g generator) ends(s *scene.Solid) (near, far vec.V3) {
+	near, far = g.arc.Start(), g.arc.End()
 	base := s.Root.Base
-	if math.Abs(base.Local(a.Start()).Z) < math.Abs(base.Local(a.End()).Z) {
-		return a.Start()
+	if math.Abs(base.Local(near).Z) < math.Abs(base.Local(far).Z) {
+		return far, near
 	}
-	return a.End()
-}
-
-// outward is the direction on paper away from the solid at a point of its
-// base: away from the axis when it is seen end-on, else out of the base.
-func (p *picture) outward(s *scene.Solid, at vec.V2) vec.V2 {
-	axis := s.Root.Base.Z
-	down := vec.V2{X: 0 - axis.Dot(p.frame.X), Y: 0 - axis.Dot(p.frame.Y)}
-	if down.Len() > foldSine {
-		return down.Unit()
-	}
-	return at.Sub(p.flatten(s.Root.Base.O)).Unit()
+	return near, far
 }

@@ -132,7 +132,7 @@ func (d *draft) nameSpots() {
 
 // leaderLengths are the lengths of leaders to try, paper mm, and leaderTurns the
 // number of directions round the point.
-func leaderLengths() []float64 { return []float64{6, 8, 11, 15, 20} }
+func leaderLengths() []float64 { return []float64{6, 8, 11, 15, 20, 27, 36} }
 
 const leaderTurns = 16
 

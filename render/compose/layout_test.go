@@ -205,19 +205,19 @@ func TestScaleAuto(t *testing.T) {
 
 func TestFigureHasItsWidth(t *testing.T) {
 	b, _ := frontAndPlan(t, false)
-	b.Form, b.Width = "figure", 120
+	b.Form, b.Width = "figure", 100
 	s, problems := Compose(&scene.Scene{}, b)
 	if s == nil || len(problems) > 0 {
 		t.Fatal(problems)
 	}
-	if s.Width != 120 {
+	if s.Width != 100 {
 		t.Errorf("width %v", s.Width)
 	}
 	e := marksExtent(s.Marks).box()
-	if e.Min.X < figureMargin-0.01 || e.Max.X > 120-figureMargin+0.01 || e.Min.Y < figureMargin-paperTie || e.Max.Y > s.Height-figureMargin+paperTie {
+	if e.Min.X < figureMargin-0.01 || e.Max.X > 100-figureMargin+0.01 || e.Min.Y < figureMargin-paperTie || e.Max.Y > s.Height-figureMargin+paperTie {
 		t.Errorf("content %v on %v by %v", e, s.Width, s.Height)
 	}
-	if e.Width() < 120-2*figureMargin-0.1 {
+	if e.Width() < 100-2*figureMargin-0.1 {
 		t.Errorf("the content is only %.2f mm wide", e.Width())
 	}
 }

@@ -90,3 +90,33 @@ func TestAuxiliary(t *testing.T) {
 		keep(t, sheet)
 	}
 }
+
+func TestSmallPapers(t *testing.T) {
+	h := rainHood(t)
+	front := elevation("front", subjects("B", h.B), "generators", "numbers")
+	front.Faint = subjects("K", h.K)
+	top := plan("top", subjects("B", h.B), front)
+	b := &scene.Block{Form: "sheet", Name: "a4", Title: "Rain hood", Size: "A4", Portrait: true, Titles: &scene.Titles{},
+		Views: []*scene.View{front, top, pattern("flat", h.D, "generators", "numbers")},
+		Notes: []*scene.Note{{Name: "note", Text: "Pattern seen from outside. Slant 286.4 mm."}},
+		Dimensions: []*scene.Dimension{
+			{Name: "K.height", On: front, Anchor: scene.Linear{B: vec.V3{Z: 260}}, Text: "260"},
+			{Name: "K.base.diameter", On: top, Anchor: scene.Diameter{Circle: scene.Circle{F: vec.World, R: 120}}, Text: "240"},
+			{Name: "R", On: nil, Anchor: scene.FlatRadius{R: 286.356, At: 2.3}, Text: "286.4"},
+			{Name: "sector", On: nil, Anchor: scene.FlatAngle{To: 2.63305}, Text: "150.9°"},
+		},
+		Tables: []*scene.Table{{Name: "table", Title: "True lengths of D", Rows: [][]string{{"No.", "from seam", "true length mm"}, {"1", "0.00°", "286.4"}, {"2", "30.00°", "286.4"}, {"3", "60.00°", "286.4"}, {"a", "73.05°", "286.4"}, {"4", "90°", "251.9"}}}},
+	}
+	b.Dimensions[2].On, b.Dimensions[3].On = b.Views[2], b.Views[2]
+	sheet, problems := Compose(&scene.Scene{}, b)
+	for _, p := range problems {
+		t.Log(p)
+	}
+	keep(t, sheet)
+	b.Form, b.Name = "figure", "fig"
+	sheet, problems = Compose(&scene.Scene{}, b)
+	for _, p := range problems {
+		t.Log(p)
+	}
+	keep(t, sheet)
+}

@@ -14,28 +14,29 @@ import (
 // a place: what is to be drawn, and what is to be written where. It holds
 // nothing that depends on paper, so that scales can be tried on it.
 type picture struct {
-	view    *scene.View
-	name    string // the View of its keys
-	frame   vec.Frame
-	parent  *picture
-	rel     relation
-	toward  vec.V2 // the direction from the parent in which it is put; zero when it stands free
-	solids  []solid
-	flat    *scene.Development // of a pattern
-	strokes []stroke
-	spots   []spot
-	tags    []tag
-	hatched []stroke // the outline to be hatched
-	signs   []sign   // lettering along lines: seams
-	faces   []sign   // places for the words that say which side is up; one is used
-	bars    bool     // bars of 100 mm to check the print
-	links   []vec.V3 // points that projectors join
-	dims    []*scene.Dimension
-	labels  []*scene.Label
-	caption []string
-	size    vec.V2   // width and height of all lines, view mm
-	rays    []vec.V2 // the directions in which projectors run
-	beside  []vec.V2 // the directions in which views in projection stand
+	view      *scene.View
+	name      string // the View of its keys
+	frame     vec.Frame
+	parent    *picture
+	rel       relation
+	toward    vec.V2 // the direction from the parent in which it is put; zero when it stands free
+	solids    []solid
+	flat      *scene.Development // of a pattern
+	strokes   []stroke
+	spots     []spot
+	tags      []tag
+	hatched   []stroke // the outline to be hatched
+	signs     []sign   // lettering along lines: seams
+	faces     []sign   // places for the words that say which side is up; one is used
+	bars      bool     // bars of 100 mm to check the print
+	links     []vec.V3 // points that projectors join
+	dims      []*scene.Dimension
+	labels    []*scene.Label
+	caption   []string
+	size      vec.V2     // width and height of all lines, view mm
+	sightings []sighting // auxiliary views that look at this one
+	rays      []vec.V2   // the directions in which projectors run
+	beside    []vec.V2   // the directions in which views in projection stand
 }
 
 // solid is a body with its name in the source.

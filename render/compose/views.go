@@ -77,6 +77,9 @@ func (j *job) foldFrom(p, parent *picture, stand bool) {
 		}
 		return
 	}
+	if p.view.Form == "view" && rel == folded {
+		parent.sightings = append(parent.sightings, sighting{p, u})
+	}
 	if stand && rel == folded && oblique(u) {
 		p.parent = parent
 		return
@@ -113,6 +116,9 @@ func (j *job) fill(p *picture) {
 		j.fillTruth(p)
 	default:
 		j.fillView(p)
+	}
+	if p.parent != nil && p.rel == apart && len(p.caption) > 0 {
+		p.caption = append(p.caption, "(turned upright, not in projection with "+p.parent.name+")")
 	}
 	for _, d := range j.block.Dimensions {
 		if d.On == v {
