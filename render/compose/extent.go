@@ -92,6 +92,23 @@ func (e *extent) clears(o *extent, g float64) bool {
 	return false
 }
 
+// area is the area of the sixteen-sided figure, mm², from its support distances.
+func (e extent) area() float64 {
+	const n = 2 * compassSize
+	h := func(i int) float64 {
+		if i %= n; i < compassSize {
+			return e.hi[i]
+		}
+		return -e.lo[i-compassSize]
+	}
+	s, c := math.Sincos(2 * math.Pi / n)
+	sum := 0.0
+	for i := range n {
+		sum += h(i) * (h(i+n-1) + h(i+1) - 2*c*h(i)) / s
+	}
+	return max(0, sum/2)
+}
+
 // box is the upright rectangle round e.
 func (e extent) box() drawing.Box {
 	return drawing.Box{Min: vec.V2{X: e.lo[0], Y: e.lo[upright]}, Max: vec.V2{X: e.hi[0], Y: e.hi[upright]}}

@@ -89,7 +89,6 @@ func generatorsOf(s *scene.Solid, d division) []generator {
 // the visible one first.
 func (p *picture) drawGenerators(b *scene.Block) {
 	bodies := p.bodies()
-	lines := view.Lines(bodies, p.frame)
 	for _, s := range p.solids {
 		gens := generatorsOf(s.value, divisionOf(b, s.value))
 		var arcs []curve.Arc
@@ -98,7 +97,7 @@ func (p *picture) drawGenerators(b *scene.Block) {
 			p.links = append(p.links, g.arc.Start(), g.arc.End())
 		}
 		count := map[int]int{}
-		for _, l := range view.Without(view.SplitBy(arcs, bodies, p.frame), lines) {
+		for _, l := range view.Without(view.SplitBy(arcs, bodies, p.frame), p.pieces) {
 			n := gens[l.A].number
 			name := ordinal("generator", n)
 			if count[n]++; count[n] > 1 {

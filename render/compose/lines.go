@@ -19,9 +19,9 @@ import (
 // where nothing else lies.
 func (p *picture) drawSolids() {
 	bodies := p.bodies()
-	pieces := view.Lines(bodies, p.frame)
+	p.pieces = view.Lines(bodies, p.frame)
 	count := map[string]int{}
-	for _, piece := range pieces {
+	for _, piece := range p.pieces {
 		role := drawing.VisibleEdge
 		if !piece.Visible {
 			if role = drawing.HiddenEdge; !p.shows("hidden") {
@@ -31,8 +31,8 @@ func (p *picture) drawSolids() {
 		s := p.solids[piece.Body]
 		p.draw(p.key(s.name, pieceName(piece, bodies, s.name, count)), role, piece.Image)
 	}
-	p.drawFaint(pieces)
-	p.addCorners(pieces)
+	p.drawFaint()
+	p.addCorners()
 }
 
 // pieceName is the feature of a piece of an edge or contour: the first piece of
@@ -53,7 +53,7 @@ func pieceName(piece view.Piece, bodies []*body.Body, solid string, count map[st
 }
 
 // drawFaint draws the visible outline of the uncut solids as former shape.
-func (p *picture) drawFaint(pieces []view.Piece) {
+func (p *picture) drawFaint() {
 	var bodies []*body.Body
 	var names []string
 	for _, f := range p.view.Faint {
@@ -71,15 +71,15 @@ func (p *picture) drawFaint(pieces []view.Piece) {
 		}
 	}
 	count := map[string]int{}
-	for _, l := range view.Without(seen, pieces) {
+	for _, l := range view.Without(seen, p.pieces) {
 		name := pieceName(l, bodies, names[l.Body], count)
 		p.draw(p.key(names[l.Body], "faint/"+name), drawing.FormerShape, l.Image)
 	}
 }
 
 // addCorners collects the corners that projectors start from: the ends of edges.
-func (p *picture) addCorners(pieces []view.Piece) {
-	for _, l := range pieces {
+func (p *picture) addCorners() {
+	for _, l := range p.pieces {
 		if l.A != l.B && !(l.Space.Form.Periodic() && l.Space.T1-l.Space.T0 >= 2*math.Pi) {
 			p.links = append(p.links, l.Space.Start(), l.Space.End())
 		}
@@ -133,8 +133,7 @@ func faceArcs(f *scene.Face) []curve.Arc {
 // hidden, in the given role where visible and dashed where hidden. What already
 // lies on a line of the view is left out.
 func (p *picture) drawWires(thing, stem string, role drawing.Role, arcs []curve.Arc) {
-	bodies := p.bodies()
-	pieces := view.Without(view.SplitBy(arcs, bodies, p.frame), view.Lines(bodies, p.frame))
+	pieces := view.Without(view.SplitBy(arcs, p.bodies(), p.frame), p.pieces)
 	for i, l := range pieces {
 		k := p.key(thing, ordinal(stem, i+1))
 		switch {

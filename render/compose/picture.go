@@ -7,6 +7,7 @@ import (
 	"epure/geom/body"
 	"epure/geom/curve"
 	"epure/geom/vec"
+	"epure/geom/view"
 	"epure/render/drawing"
 )
 
@@ -22,6 +23,7 @@ type picture struct {
 	toward    vec.V2 // the direction from the parent in which it is put; zero when it stands free
 	solids    []solid
 	flat      *scene.Development // of a pattern
+	pieces    []view.Piece       // what is seen and hidden of the solids
 	strokes   []stroke
 	spots     []spot
 	tags      []tag

@@ -159,7 +159,7 @@ func (p *picture) drawMiddle(name string, a, b vec.V2) {
 		return
 	}
 	line := view.Piece{Image: curve.Segment2(a, b), Space: curve.Segment(p.frame.Lift(a), p.frame.Lift(b)), Body: view.Wire, Visible: true}
-	for i, l := range view.Without([]view.Piece{line}, view.Lines(p.bodies(), p.frame)) {
+	for i, l := range view.Without([]view.Piece{line}, p.pieces) {
 		p.draw(p.key(name, ordinal("plane", i+1)), drawing.CuttingPlane, l.Image).pen = drawing.Group.Centre
 	}
 }
