@@ -104,7 +104,7 @@ func (c *converter) explainHead(failed int) bool {
 		c.wantHead(failed, []string{"from", "text"}, "case from \"file\"")
 	case head == "case" && failed == 2 && failed == len(c.row):
 		t := c.row[1]
-		c.add(c.error("missing-clause", t.end, t.end, "this case sets nothing").
+		c.add(c.error("empty-case", t.end, t.end, "this case sets nothing").
 			Because("after the name stand the givens and their values, `case \"DN 50\" foot 50 mm`"))
 	default:
 		return false
@@ -122,7 +122,7 @@ func (c *converter) wantHead(failed int, wants []string, shape string) {
 	case want == "name":
 		c.add(c.error("missing-name", t.start, t.end, "a name is missing after %s", c.quote(c.row[failed-1])).Because(reason))
 	case want == "text":
-		c.add(c.error("missing-text", t.start, t.end, "a text in double quotes is missing after %s", c.quote(c.row[failed-1])).Because(reason))
+		c.add(c.error("missing-path", t.start, t.end, "a text in double quotes is missing after %s", c.quote(c.row[failed-1])).Because(reason))
 	default:
 		end := c.row[failed-1].end
 		c.add(c.error("missing-word", t.start, t.end, "`%s` is missing after %s", want, c.quote(c.row[failed-1])).Because(reason).

@@ -8,10 +8,10 @@ import (
 	"epure/lang/source"
 )
 
-// maxTokens bounds one statement: an outline of ten thousand corners fits.
-const maxTokens = 1 << 17
+// maxTokens bounds one statement: an outline of five thousand corners fits.
+const maxTokens = 1 << 15
 
-const tooLongRule = "a statement has at most 131072 words and signs"
+const tooLongRule = "a statement has at most 32768 words and signs"
 
 // maxDepth bounds how deep brackets and powers are nested in a statement, since
 // what walks the tree calls itself once for each.
