@@ -144,27 +144,50 @@ func TestSideAreasAgainstGenerators(t *testing.T) {
 	}
 }
 
+// coordinate draws from -1 to 1 in steps of 1/32, so that planes through the apex, along generators, square to
+// the axis and through edges come up often, at times off by a little that is
+// clearly under or clearly over the rounding bounds.
+func coordinate(t *rapid.T, n string) float64 {
+	off := rapid.SampledFrom([]float64{0, 0, 0, 1e-14, -1e-8, 1e-6, 0.011}).Draw(t, n+" off")
+	return float64(rapid.IntRange(-32, 32).Draw(t, n))/32 + off
+}
+
+// direction draws a vector that is not too short to be one.
+func direction(t *rapid.T, n string) vec.V3 {
+	d := vec.V3{X: coordinate(t, n+"x"), Y: coordinate(t, n+"y"), Z: coordinate(t, n+"z")}
+	if d.Len() < 0.1 {
+		d.Z = 1
+	}
+	return d
+}
+
 // anySolid draws a cone, frustum or cylinder in any position and size.
 func anySolid(t *rapid.T) *Body {
 	size := math.Pow(10, rapid.Float64Range(-1, 5).Draw(t, "log size"))
-	c := func(n string) float64 { return rapid.Float64Range(-1, 1).Draw(t, n) }
-	z := vec.V3{X: c("ax"), Y: c("ay"), Z: c("az")}
-	if z.Len() < 0.1 {
-		z = vec.V3{Z: 1}
-	}
+	o := vec.V3{X: coordinate(t, "x"), Y: coordinate(t, "y"), Z: coordinate(t, "z")}.Scale(size)
 	r := rapid.SampledFrom([][2]float64{{1, 0}, {0, 1}, {1, 0.5}, {0.4, 1}, {1, 1}}).Draw(t, "radii")
-	h := rapid.Float64Range(0.2, 3).Draw(t, "height")
-	return solid(vec.V3{X: c("x"), Y: c("y"), Z: c("z")}.Scale(size), z, r[0]*size, r[1]*size, h*size)
+	h := float64(rapid.IntRange(1, 12).Draw(t, "height")) / 4
+	return solid(o, direction(t, "axis"), r[0]*size, r[1]*size, h*size)
 }
 
-// anyPlane draws a plane that passes near the middle of b.
+// anyPlane draws a plane that passes near the middle of b, often through its axis or apex or
+// square to what is drawn before.
 func anyPlane(t *rapid.T, b *Body, n string) surface.Plane {
-	c := func(s string) float64 { return rapid.Float64Range(-1, 1).Draw(t, n+s) }
-	d := vec.V3{X: c("nx"), Y: c("ny"), Z: c("nz")}
-	if d.Len() < 0.1 {
-		d = vec.V3{X: 1}
+	o := b.Middle()
+	if a := b.Apexes(); len(a) > 0 && rapid.IntRange(0, 3).Draw(t, n+" apex") == 0 {
+		o = a[0]
+	} else if rapid.Bool().Draw(t, n+" off middle") {
+		o = o.Add(vec.V3{X: coordinate(t, n+"x"), Y: coordinate(t, n+"y"), Z: coordinate(t, n+"z")}.Scale(b.Size() * 0.4))
 	}
-	return plane(b.Middle().Add(vec.V3{X: c("x"), Y: c("y"), Z: c("z")}.Scale(b.Size()*0.4)), d)
+	d := direction(t, n)
+	s, ok := b.Faces[0].Surface.(surface.Ruled)
+	if ok && rapid.IntRange(0, 3).Draw(t, n+" along") == 0 { // along a generator
+		d = s.Ruling(coordinate(t, n+"theta") * math.Pi).D.Cross(d)
+		if d.Len() < 0.1 {
+			d = vec.V3{X: 1}
+		}
+	}
+	return plane(o, d)
 }
 
 func TestPartsMakeTheWhole(t *testing.T) {

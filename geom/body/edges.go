@@ -42,23 +42,14 @@ func (b *Body) meeting(i, j int) []curve.Arc {
 	return nil
 }
 
-// trace is the curves of the plane p on the curved face i.
+// trace is the curves of the plane p on the curved face i. A plane that passes an apex within the gap goes
+// through it here: a branch whose vertex cannot be told from the apex has no edge there.
 func (b *Body) trace(p surface.Plane, i int) []curve.Arc {
 	s, ok := b.Faces[i].Surface.(surface.Traced)
 	if !ok {
 		return nil
 	}
-	return s.Arcs(p, b.touch(p), b.middle, b.size)
-}
-
-// touch is the distance under which the plane p goes through an apex or touches
-// a cylinder: the rounding of the coordinates that the distance comes from.
-func (b *Body) touch(p surface.Plane) float64 { return Touch(p, b.size, b.middle) }
-
-// Touch is the bound of rounding, mm, on the distance from a plane to a point of
-// a body of the given size about the given middle.
-func Touch(p surface.Plane, size float64, middle vec.V3) float64 {
-	return num.Place * (size + p.F.O.Sub(middle).Len() + middle.Len())
+	return s.Arcs(p, b.gap(), b.middle, b.size)
 }
 
 // twoPlanes is the line in which two planes meet, with its origin near p; none
