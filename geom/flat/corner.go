@@ -13,9 +13,16 @@ import (
 // generator edge, or the root of the difference of two profiles, which is once
 // more a + b·cos + c·sin and has its roots in closed form.
 //
-// Ends are one corner when they lie within num.Join of each other in angle and
+// Ends are one corner when they lie within a tolerance of each other in angle and
 // in space; not by the angle alone, since the edge of a plane that passes close
 // by the apex runs along all but one generator.
+
+// finest and num.Join are the tolerances tried in turn, as share of the size
+// and in radians, until the outline closes. Two edges that cross under 1e-5 rad
+// place their common corner to some 1e-10; num.Join is for corners that the
+// body found only to the square root of what it can tell apart. Going straight
+// to num.Join would swallow short edges.
+const finest = 1e-9
 
 // end is one end of the rim or wall with the index of.
 type end struct {
@@ -85,7 +92,7 @@ func (p *Pattern) together(a, b end) bool {
 		return false
 	}
 	apart := p.roll.space(a.phi, a.u).Dist(p.roll.space(b.phi, b.u))
-	return gap(a.phi, b.phi) < num.Join && apart < num.Join*p.size
+	return gap(a.phi, b.phi) < p.join && apart < p.join*p.size
 }
 
 // corner is the angle of a group, in [0, turn), that of the seam when it is next to it.
@@ -97,7 +104,10 @@ func (p *Pattern) corner(group []end) float64 {
 	first := p.rims[group[0].of]
 	for _, e := range group[1:] {
 		if other := p.rims[e.of]; other.face != first.face {
-			return snap(first.meets(other.profile, phi), angleError)
+			if met := first.meets(other.profile, phi); gap(met, phi) < p.join {
+				phi = met
+			}
+			return snap(phi, angleError)
 		}
 	}
 	return snap(phi, angleError)

@@ -30,6 +30,7 @@ import (
 	"math"
 
 	"epure/geom/body"
+	"epure/geom/num"
 	"epure/geom/vec"
 )
 
@@ -56,6 +57,7 @@ type Pattern struct {
 	panels   []panel
 	opts     Options
 	size     float64 // of the body, mm
+	join     float64 // share of the size, and angle, within which ends are one corner
 }
 
 // FaceError says why a face cannot be unrolled.
@@ -76,8 +78,8 @@ func (e *DivisionsError) Error() string {
 }
 
 // Of unrolls the curved face i of b. It fails with *DivisionsError, or with
-// *FaceError when the face is no cone or cylinder, is bounded by something
-// else than planes, or its edges do not enclose it.
+// *FaceError when the face is no cone or cylinder, nothing of it is left, it is
+// bounded by something else than planes, or its edges do not enclose it.
 func Of(b *body.Body, i int, o Options) (*Pattern, error) {
 	if o.Divisions < MinDivisions {
 		return nil, &DivisionsError{o.Divisions}
@@ -89,19 +91,28 @@ func Of(b *body.Body, i int, o Options) (*Pattern, error) {
 	if !ok {
 		return nil, &FaceError{b.Faces[i].Label, "it is neither a cone nor a cylinder"}
 	}
-	p := &Pattern{body: b, face: i, roll: r, opts: o, size: b.Size()}
-	if err := p.gather(b.Edges()); err != nil {
-		return nil, err
-	}
-	if err := p.divide(); err != nil {
-		return nil, err
-	}
+	var p *Pattern
 	var err error
-	if p.Loops, err = p.outline(); err != nil {
-		return nil, err
+	for _, join := range []float64{finest, num.Join} {
+		p = &Pattern{body: b, face: i, roll: r, opts: o, size: b.Size(), join: join}
+		if err = p.unroll(); err == nil {
+			p.Stations = p.stations()
+			return p, nil
+		}
 	}
-	p.Stations = p.stations()
-	return p, nil
+	return nil, err
+}
+
+// unroll finds edges, panels and outline.
+func (p *Pattern) unroll() (err error) {
+	if err = p.gather(p.body.Edges()); err != nil {
+		return err
+	}
+	if err = p.divide(); err != nil {
+		return err
+	}
+	p.Loops, err = p.outline()
+	return err
 }
 
 // Count is the number of pieces of material that the pattern falls into: one,

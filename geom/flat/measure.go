@@ -87,16 +87,16 @@ func (p *Pattern) reach() (lo, hi float64) {
 	lo, hi = math.Inf(1), math.Inf(-1)
 	for _, q := range p.panels {
 		for _, b := range q.spans {
-			a, _ := p.range2(b.lo, q)
-			_, z := p.range2(b.hi, q)
+			a, _ := p.extent(b.lo, q)
+			_, z := p.extent(b.hi, q)
 			lo, hi = min(lo, a), max(hi, z)
 		}
 	}
 	return lo, hi
 }
 
-// range2 is the least and the greatest u of the rim j within the panel.
-func (p *Pattern) range2(j int, q panel) (lo, hi float64) {
+// extent is the least and the greatest u of the rim j within the panel.
+func (p *Pattern) extent(j int, q panel) (lo, hi float64) {
 	lo, hi = p.u(j, q.a), p.u(j, q.b)
 	if lo > hi {
 		lo, hi = hi, lo
@@ -130,7 +130,7 @@ func (p *Pattern) SteppedGirth(n int) float64 {
 }
 
 // Bounds are the corners of the exact box round the pattern: ends of the
-// pieces and the points at which x or y is extreme. Without material both are zero.
+// pieces and the points at which x or y is extreme.
 func (p *Pattern) Bounds() (lo, hi vec.V2) {
 	lo = vec.V2{X: math.Inf(1), Y: math.Inf(1)}
 	hi = vec.V2{X: math.Inf(-1), Y: math.Inf(-1)}
@@ -142,9 +142,6 @@ func (p *Pattern) Bounds() (lo, hi vec.V2) {
 				hi = vec.V2{X: max(hi.X, at.X), Y: max(hi.Y, at.Y)}
 			}
 		}
-	}
-	if len(p.Loops) == 0 {
-		return vec.V2{}, vec.V2{}
 	}
 	return lo, hi
 }

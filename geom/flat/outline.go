@@ -33,6 +33,9 @@ func (p *Pattern) outline() ([][]Piece, error) {
 		}
 		loops = append(loops, p.pieces(l))
 	}
+	if len(loops) == 0 {
+		return nil, p.fail("nothing of it is left")
+	}
 	return loops, nil
 }
 
@@ -95,7 +98,7 @@ func (p *Pattern) wallLinks(phi float64, left, right []band) []link {
 }
 
 // blur is the difference of u, mm, within which ends on the generator at phi
-// are one: samePoint, and what the rounding of the angle makes of a steep edge.
+// are one: that of a corner, and what the rounding of the angle makes of a steep edge.
 func (p *Pattern) blur(phi float64, bands []band) float64 {
 	slope := 0.0
 	for _, b := range bands {
@@ -105,7 +108,7 @@ func (p *Pattern) blur(phi float64, bands []band) float64 {
 			}
 		}
 	}
-	return samePoint*p.size + float64(slope*angleError)
+	return p.join*p.size + float64(slope*angleError)
 }
 
 // at tells whether the wall lies on the generator at phi in [0, turn].

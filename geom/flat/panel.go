@@ -46,10 +46,6 @@ const apex = -1
 // thousand times angleError.
 const sameAngle = 1e-10
 
-// samePoint is the share of the body's size under which two ends along a
-// generator are one: sameAngle on an edge that runs at a slope of 100.
-const samePoint = 100 * sameAngle
-
 // angleError bounds the rounding of an angle of the order of a turn after some
 // frame changes and a root, radians: 64 units in the last place of 1.
 const angleError = num.Place
@@ -190,7 +186,7 @@ func (p *Pattern) at(phi float64) []Span {
 			s = append(s, Span{Lo: lo, Hi: max(lo, hi)})
 		}
 	}
-	s = union(s, samePoint*p.size)
+	s = union(s, p.join*p.size)
 	for i := range s {
 		s[i].Low, s[i].High = p.roll.flat(phi, s[i].Lo), p.roll.flat(phi, s[i].Hi)
 	}

@@ -52,6 +52,10 @@ func (p *Pattern) areaFlat() float64 {
 	sum := 0.0
 	for _, l := range p.Loops {
 		for _, q := range l {
+			if a, ok := q.Arc2(); ok {
+				sum += a.Sweep(vec.V2{})
+				continue
+			}
 			lo, hi := min(q.T0, q.T1), max(q.T0, q.T1)
 			a := integral(func(t float64) float64 { return q.Path.At(t).Cross(q.Path.Deriv(t, 1)) }, lo, hi) / 2
 			if q.T1 < q.T0 {
@@ -150,7 +154,7 @@ func (p *Pattern) pieceMiss(q Piece) float64 {
 	worst := 0.0
 	for k := range probes + 1 {
 		x := p.Fold(q.Path.At(q.T0 + float64((q.T1-q.T0)*(float64(k)/probes))))
-		worst = max(worst, math.Abs(p.face3().Value(x)))
+		worst = max(worst, math.Abs(p.surface().Value(x)))
 		if q.Face != Seam {
 			worst = max(worst, math.Abs(p.body.Faces[q.Face].Surface.Value(x)))
 		}
@@ -170,8 +174,8 @@ func (p *Pattern) endMiss(q vec.V2) float64 {
 			near = min(near, math.Abs(f.Surface.Value(x)))
 		}
 	}
-	return max(near, math.Abs(p.face3().Value(x)))
+	return max(near, math.Abs(p.surface().Value(x)))
 }
 
-// face3 is the surface that was unrolled.
-func (p *Pattern) face3() surface.Surface { return p.body.Faces[p.face].Surface }
+// surface is the surface that was unrolled.
+func (p *Pattern) surface() surface.Surface { return p.body.Faces[p.face].Surface }

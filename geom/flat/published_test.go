@@ -263,6 +263,13 @@ func TestErrors(t *testing.T) {
 	if _, err := Of(b, 7, Options{Divisions: 12}); !errors.As(err, &f) || f.Face != "face 7" {
 		t.Errorf("no face: %v", err)
 	}
+	box := upright(50, 50, 40)
+	for i, n := range []vec.V3{{X: 1}, {X: -1}, {Y: 1}, {Y: -1}} {
+		box = cutOff(t, box, n.Scale(20), n, string(rune('P'+i)))
+	}
+	if _, err := Of(box, 0, Options{Divisions: 12}); !errors.As(err, &f) || err.Error() != "K.side cannot be unrolled: nothing of it is left" {
+		t.Errorf("a box: %v", err)
+	}
 	p := side(t, b, 0, 12)
 	var off *OffError
 	if _, err := p.Flat(vec.V3{X: 60}); !errors.As(err, &off) || off.OnSurface {

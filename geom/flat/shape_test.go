@@ -270,6 +270,27 @@ func TestNearApex(t *testing.T) {
 	}
 }
 
+// Needles and discs: cones from 0.01° to 89.99° of half angle keep area and place.
+func TestExtremeCones(t *testing.T) {
+	for _, half := range []float64{0.01, 1, 45, 89, 89.99} {
+		sin, cos := math.Sincos(half * degree)
+		b := cutOff(t, upright(100*sin, 0, 100*cos), vec.V3{Z: 60 * cos}, vec.V3{X: cos, Z: 2 * sin}, "P")
+		p := side(t, b, 0.7, 12)
+		pr := p.Proof()
+		if pr.Worst() > 1e-10 || pr.Deviation > rounding*p.size { // the goal for quadratures
+			t.Errorf("half angle %g°: %+v", half, pr)
+		}
+		for _, s := range p.Stations {
+			for _, x := range s.Spans {
+				q, err := p.Flat(p.Fold(x.High))
+				if err != nil || q.Dist(x.High) > rounding*p.size && s.Number != 1 {
+					t.Errorf("half angle %g°: %v comes back as %v, %v", half, x.High, q, err)
+				}
+			}
+		}
+	}
+}
+
 func BenchmarkOf(b *testing.B) {
 	k := cutOff(b, upright(120, 0, 260), vec.V3{X: 35}, vec.V3{X: 260, Z: 120}, "P")
 	for b.Loop() {

@@ -173,7 +173,7 @@ func (p *Pattern) longest() []reason {
 			at = append(at, q.b)
 		}
 	}
-	size, lo, hi := samePoint*p.size, math.Inf(1), math.Inf(-1)
+	size, lo, hi := p.join*p.size, math.Inf(1), math.Inf(-1)
 	length := func(phi float64) float64 { return Station{Spans: p.at(phi)}.Length() }
 	for _, phi := range at {
 		l := length(phi)
@@ -254,7 +254,7 @@ func (p *Pattern) TrueLength(theta float64) float64 {
 	phi := snap(wrap(theta-p.opts.Seam), sameAngle)
 	s := p.at(phi)
 	if phi == 0 {
-		s = union(append(s, p.at(turn)...), samePoint*p.size)
+		s = union(append(s, p.at(turn)...), p.join*p.size)
 	}
 	return Station{Spans: s}.Length()
 }
