@@ -119,8 +119,8 @@ func boxExtent(b drawing.Box) extent {
 	return nothing().with(b.Min).with(b.Max).with(vec.V2{X: b.Min.X, Y: b.Max.Y}).with(vec.V2{X: b.Max.X, Y: b.Min.Y})
 }
 
-// shapeExtent is the extent of a shape without the width of its line: exact for
-// lines and arcs, that of the control points for Béziers, the real size for text.
+// shapeExtent is the extent of a shape without the width of its line, and the room
+// of a text. It is exact: control points, which lie off their curve, do not count.
 func shapeExtent(s drawing.Shape) extent {
 	e := nothing()
 	switch s := s.(type) {
@@ -129,10 +129,16 @@ func shapeExtent(s drawing.Shape) extent {
 	case drawing.EllipseArc:
 		return arcExtent(s)
 	case drawing.Quad:
-		return e.with(s.P0).with(s.P1).with(s.P2)
+		return curveExtent(s.At, func(d vec.V2) []float64 { // Q' = 2(a + t(b - a))
+			a, b := s.P1.Sub(s.P0).Dot(d), s.P2.Sub(s.P1).Dot(d)
+			return []float64{a / (a - b)}
+		})
 	case drawing.Spline:
-		for _, p := range s.Points {
-			e = e.with(p)
+		for _, c := range s.Cubics() {
+			e = e.union(curveExtent(c.At, func(d vec.V2) []float64 { // C' = 3(a(1-t)² + 2bt(1-t) + ct²)
+				a, b, c := c[1].Sub(c[0]).Dot(d), c[2].Sub(c[1]).Dot(d), c[3].Sub(c[2]).Dot(d)
+				return quadraticRoots(a-2*b+c, 2*(b-a), a)
+			}))
 		}
 	case drawing.Path:
 		for _, p := range s.Pieces {
@@ -144,6 +150,31 @@ func shapeExtent(s drawing.Shape) extent {
 		}
 	}
 	return e
+}
+
+// curveExtent is the extent of a curve over 0 <= t <= 1; turns gives the
+// parameters where it may run square to a direction.
+func curveExtent(at func(float64) vec.V2, turns func(vec.V2) []float64) extent {
+	e := nothing().with(at(0)).with(at(1))
+	for _, d := range compass() {
+		for _, t := range turns(d) {
+			if t > 0 && t < 1 {
+				e = e.with(at(t))
+			}
+		}
+	}
+	return e
+}
+
+// quadraticRoots are the real roots of a t² + b t + c, NaN or Inf among them when
+// the equation is of lower degree.
+func quadraticRoots(a, b, c float64) []float64 {
+	disc := b*b - 4*a*c
+	if disc < 0 {
+		return nil
+	}
+	q := -(b + math.Copysign(math.Sqrt(disc), b)) / 2
+	return []float64{q / a, c / q}
 }
 
 // arcExtent adds to the ends of an arc its farthest points in each direction.

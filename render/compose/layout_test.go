@@ -29,6 +29,38 @@ func TestExtentOfCircleIsItsRadius(t *testing.T) {
 	}
 }
 
+// TestExtentOfBeziersIsTheCurves: by sampling the curve at a thousand places.
+func TestExtentOfBeziersIsTheCurves(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		f := rapid.Float64Range(-50, 50)
+		var p [4]vec.V2
+		for i := range p {
+			p[i] = vec.V2{X: f.Draw(t, "x"), Y: f.Draw(t, "y")}
+		}
+		q := drawing.Quad{P0: p[0], P1: p[1], P2: p[2]}
+		for _, c := range []struct {
+			shape drawing.Shape
+			at    func(float64) vec.V2
+		}{{q, q.At}, {drawing.Spline{Points: p[:]}, drawing.Cubic(p).At}} {
+			seen := nothing()
+			for i := range 1001 {
+				seen = seen.with(c.at(float64(i) / 1000))
+			}
+			got := shapeExtent(c.shape)
+			for i := range got.lo {
+				// A thousandth of the way past an extreme the curve has fallen off by
+				// at most |C''|/2 · 0.0005² < 6·200/2 · 2.5e-7 mm.
+				if d := got.hi[i] - seen.hi[i]; d < -paperTie || d > 2e-4 {
+					t.Fatalf("%T direction %d: over by %v", c.shape, i, d)
+				}
+				if d := seen.lo[i] - got.lo[i]; d < -paperTie || d > 2e-4 {
+					t.Fatalf("%T direction %d: under by %v", c.shape, i, d)
+				}
+			}
+		}
+	})
+}
+
 // TestGapNeverExceedsTheTruth compares the gap of two rectangles with their true distance.
 func TestGapNeverExceedsTheTruth(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {

@@ -23,7 +23,11 @@ func (j *job) projectors(a *attempt, i int) []drawing.Mark {
 	var out []drawing.Mark
 	across := p.toward.Left()
 	var done []float64
-	for _, q := range append(p.links[:len(p.links):len(p.links)], p.parent.links...) {
+	links := p.links
+	if p.view.Form != "true_shape" { // a section has no other points than its own
+		links = append(links[:len(links):len(links)], p.parent.links...)
+	}
+	for _, q := range links {
 		from := a.layout.items[up].at.Add(e.at(e.p.flatten(q)))
 		to := a.layout.items[i].at.Add(d.at(p.flatten(q)))
 		if drawn(done, from.Dot(across)) || from.Dist(to) == 0 {
