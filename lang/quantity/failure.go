@@ -73,10 +73,17 @@ func (f *Failure) mismatch() string {
 }
 
 func (f *Failure) domain() string {
-	if f.Op == "^" {
+	switch f.Op {
+	case "^":
 		return fmt.Sprintf("%s to the power %s has no value", Format(f.Left), Format(f.Right))
+	case "sqrt":
+		return fmt.Sprintf("the square root of %s has no value", Format(f.Left))
+	case "round":
+		return fmt.Sprintf("%s is no step to round to", Format(f.Left))
+	case "atan2":
+		return "the direction (0, 0) has no angle"
 	}
-	return fmt.Sprintf("the %s of %s has no value", f.Op, Format(f.Left))
+	return fmt.Sprintf("`%s` of %s has no value", f.Op, Format(f.Left))
 }
 
 // Why returns the reason: the rule, with the values that broke it. It may be "".
@@ -119,7 +126,7 @@ func domainRule(op string) string {
 	case "^":
 		return "a negative number has only whole powers"
 	case "sqrt":
-		return "only what is not negative has a square root"
+		return "a negative number has no square root"
 	case "tan":
 		return "the tangent has no value at 90° and every 180° from there"
 	case "asin":
@@ -127,7 +134,7 @@ func domainRule(op string) string {
 	case "acos":
 		return "a cosine lies between -1 and 1"
 	case "atan2":
-		return "the direction of (0, 0) has no angle"
+		return "rise and run are both zero"
 	case "round":
 		return "the step must be greater than zero"
 	}

@@ -135,7 +135,7 @@ func (s *scanner) fail(p Problem, start, end int, text, reason, write string) {
 func (s *scanner) scan() {
 	size, whole := s.number()
 	switch {
-	case s.err != nil:
+	case s.err != nil && s.err.Write == "":
 		return
 	case whole && s.at(':') && isDigit(s.peek(1)):
 		s.slope(size)
