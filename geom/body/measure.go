@@ -68,6 +68,17 @@ func (b *Body) faceMoments(i int, f vec.Frame) moments {
 	return m
 }
 
+// FaceCentroid is the centre of the area of the plane face i; false for a curved face.
+func (b *Body) FaceCentroid(i int) (vec.V3, bool) {
+	p, ok := b.Faces[i].Surface.(surface.Plane)
+	if !ok {
+		return vec.V3{}, false
+	}
+	f := p.Near(b.middle)
+	m := b.faceMoments(i, f)
+	return f.Lift(vec.V2{X: m.s / m.area, Y: m.t / m.area}), m.area > 0
+}
+
 // Volume is mm³.
 func (b *Body) Volume() float64 { v, _ := b.mass(); return v }
 
