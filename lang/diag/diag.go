@@ -126,6 +126,7 @@ func compare(a, b Diagnostic) int {
 		cmp.Compare(a.Span.End, b.Span.End),
 		cmp.Compare(a.Text, b.Text),
 		cmp.Compare(a.Reason, b.Reason),
+		cmp.Compare(len(a.Notes), len(b.Notes)),
 	)
 }
 

@@ -81,7 +81,7 @@ func (l *scanner) slips() bool {
 		l.mean(wrong, "^", "look-alike", "a power is written with `^`")
 	case "//":
 		start := l.pos
-		l.pos = l.lineEnd()
+		l.comment()
 		l.add(l.error("stray-character", start, start+2, "a comment begins with `#`").WithFix(l.span(start, start+2), "#"))
 	default:
 		return false
