@@ -61,6 +61,9 @@ func (p *picture) drawConstruction(s *scene.Scene) {
 	for _, sec := range p.sectionsOf(s) {
 		if p.shows("focal_spheres") {
 			for i, f := range sec.FocalSpheres() {
+				if !touches(sec.Of, f) {
+					continue
+				}
 				p.drawSphere(ordinal(sec.Name+".sphere", i+1), f)
 			}
 		}
@@ -68,6 +71,14 @@ func (p *picture) drawConstruction(s *scene.Scene) {
 			p.markFoci(sec)
 		}
 	}
+}
+
+// touches reports whether the circle of contact of a focal sphere lies on the
+// solid: the second sphere of a hyperbola lies in the nappe that is not there.
+func touches(s *scene.Solid, f cut.FocalSphere) bool {
+	lo, hi := s.Whole.Body.Bounds(s.Root.Base)
+	z := s.Root.Base.Local(f.Ring.O).Z
+	return lo.Z <= z && z <= hi.Z
 }
 
 // drawSphere draws the outline of a focal sphere, the circle in which it touches
@@ -86,7 +97,11 @@ func (p *picture) drawSphere(name string, f cut.FocalSphere) {
 // markFoci marks the foci of a section with dots and their names.
 func (p *picture) markFoci(sec *scene.Section) {
 	foci := sec.Conic.Foci()
+	box := p.drawnBox(outlineRole)
 	for i, f := range foci {
+		if !within(box, p.flatten(f), sameLine) {
+			continue
+		}
 		p.spots = append(p.spots, spot{key: p.key(sec.Name, ordinal("focus", i+1)), at: p.flatten(f), text: numbered("F", i, len(foci))})
 		p.links = append(p.links, f)
 	}

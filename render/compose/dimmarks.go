@@ -42,8 +42,7 @@ func (d *draft) cheapest(options [][]drawing.Mark) []drawing.Mark {
 		cost := 0.0
 		for _, m := range marks {
 			if t, ok := m.Shape.(drawing.Text); ok {
-				lines, words := d.field.count(textRoom(t).grown(lettersClear))
-				cost += float64(lines*lineCost + words*wordCost)
+				cost += d.cost(t)
 			}
 		}
 		if cost < bestCost {

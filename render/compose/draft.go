@@ -44,7 +44,6 @@ func inkFor(g drawing.Group) ink {
 // such as the view's own scale.
 func newDraft(p *picture, scale float64, k ink, note string) *draft {
 	d := &draft{p: p, scale: scale, ink: k}
-	d.drawHatching()
 	d.drawStrokes()
 	d.core = d.coreBox()
 	d.outline = d.outlineChords()
@@ -56,6 +55,7 @@ func newDraft(p *picture, scale float64, k ink, note string) *draft {
 	d.nameSpots()
 	d.drawLabels()
 	d.drawSightings()
+	d.drawHatching()
 	d.room = marksExtent(d.marks)
 	if d.room.empty() {
 		d.room = nothing().with(vec.V2{})
@@ -154,21 +154,6 @@ func (d *draft) keepRays() {
 		for _, q := range d.p.links {
 			a := d.at(d.p.flatten(q))
 			d.field.lines = append(d.field.lines, line{a, a.Along(u, rayLength)})
-		}
-	}
-}
-
-// drawHatching hatches the outlines that ask for it.
-func (d *draft) drawHatching() {
-	for _, h := range d.p.hatched {
-		path, ok := h.shape(d.scale).(drawing.Path)
-		if !ok {
-			continue
-		}
-		for i, l := range drawing.Hatch([]drawing.Path{path}, drawing.HatchAngle, drawing.PitchFor(shapeExtent(path).box())) {
-			k := h.key
-			k.Feature = ordinal(k.Feature, i+1)
-			d.marks = append(d.marks, drawing.Mark{Key: k, Role: drawing.Hatching, Pen: d.ink.pens.Pen(drawing.Hatching), Shape: l})
 		}
 	}
 }

@@ -5,7 +5,6 @@ import (
 
 	"epure/geom/vec"
 	"epure/render/drawing"
-	"epure/render/font"
 )
 
 // Room on paper. Views are placed by what they really cover, not by upright
@@ -145,7 +144,7 @@ func shapeExtent(s drawing.Shape) extent {
 			e = e.union(shapeExtent(p))
 		}
 	case drawing.Text:
-		for _, p := range font.Corners(s) {
+		for _, p := range textRoom(s).corners() {
 			e = e.with(p)
 		}
 	}

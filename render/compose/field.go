@@ -2,6 +2,8 @@ package compose
 
 import (
 	"math"
+	"strings"
+	"unicode"
 
 	"epure/geom/vec"
 	"epure/render/drawing"
@@ -63,10 +65,28 @@ func (f *field) addMarks(marks []drawing.Mark) {
 	}
 }
 
-// textRoom is the rectangle that a line of lettering covers.
+// Room of lettering below the baseline and above the height of capitals, over
+// that height: tails, and marks over capitals (c3 and f of ISO 3098, type B).
+const (
+	tailRoom   = 0.3
+	accentRoom = 0.35
+)
+
+// textRoom is the rectangle that a line of lettering covers: from the baseline
+// to the height of capitals, with tails and accents where the text has any.
 func textRoom(t drawing.Text) quadrangle {
-	c := font.Corners(t)
-	return quadrangle{c[0], c[1].Sub(c[0]), c[3].Sub(c[0])}
+	at, width := font.Start(t)
+	low, high := 0.0, t.Height
+	if strings.ContainsAny(t.String, "gjpqyQ,;()[]{}|/@$_") {
+		low = -tailRoom * t.Height
+	}
+	for _, r := range t.String {
+		if r > unicode.MaxLatin1 && unicode.IsLetter(r) || unicode.IsUpper(r) && r > unicode.MaxASCII {
+			low, high = -tailRoom*t.Height, t.Height*(1+accentRoom)
+		}
+	}
+	u := drawing.Dir(t.Angle)
+	return quadrangle{at.Along(u.Left(), low), u.Scale(width), u.Left().Scale(high - low)}
 }
 
 // wordsClear is the least distance of two words more than that of a word and a
@@ -99,21 +119,28 @@ func (f *field) count(q quadrangle) (lines, words int) {
 
 // meets reports whether a line has a point in the rectangle.
 func (q quadrangle) meets(l line) bool {
-	lo, hi := 0.0, 1.0
+	_, _, ok := q.inside(l)
+	return ok
+}
+
+// inside is the part of a line within the rectangle, as shares of the line; false
+// when there is none.
+func (q quadrangle) inside(l line) (lo, hi float64, ok bool) {
+	lo, hi = 0, 1
 	d := l.b.Sub(l.a)
 	for _, side := range [2]vec.V2{q.u, q.v} {
 		n := side.Unit()
 		o, r, w := l.a.Sub(q.at).Dot(n), d.Dot(n), side.Len()
 		if r == 0 {
 			if o < 0 || o > w {
-				return false
+				return 0, 0, false
 			}
 			continue
 		}
 		a, b := (0-o)/r, (w-o)/r
 		lo, hi = max(lo, min(a, b)), min(hi, max(a, b))
 	}
-	return lo <= hi
+	return lo, hi, lo <= hi
 }
 
 // overlaps reports whether two rectangles share a point, by the four directions

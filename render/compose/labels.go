@@ -24,13 +24,14 @@ type place struct {
 	turns  []float64 // turns from prefer to try, radians
 }
 
-// Costs of a place. One word covered is worse than any number of lines that a
-// short text can lie on, and a line is worse than any detour.
+// Costs of a place. One word covered is worse than any number of lines, and a line
+// is worse than any detour; many lines count no more than mostLines.
 const (
-	wordCost = 1000
-	lineCost = 50
-	stepCost = 2
-	turnCost = 1
+	wordCost  = 1000
+	lineCost  = 50
+	mostLines = 10
+	stepCost  = 2
+	turnCost  = 1
 )
 
 // settle returns the text in the best place.
@@ -59,7 +60,7 @@ func (d *draft) settle(q place) drawing.Text {
 // cost counts what a text would lie on.
 func (d *draft) cost(t drawing.Text) float64 {
 	lines, words := d.field.count(textRoom(t).grown(lettersClear))
-	return float64(words*wordCost + lines*lineCost)
+	return float64(words*wordCost + min(lines, mostLines)*lineCost)
 }
 
 // beside places a text so that its box is r mm clear of the point, its centre
@@ -100,7 +101,7 @@ func (d *draft) drawTags() {
 		if t.row > 1 && (t.row-1)%rowStep(t.room*d.scale, h*crowdedRow) != 0 {
 			continue
 		}
-		q := place{at: d.at(t.at), prefer: t.away, past: t.past, height: h, text: t.text, steps: []float64{1.5, 3, 5, 7.5}, turns: fan(math.Pi/9, 4)}
+		q := place{at: d.at(t.at), prefer: t.away, past: t.past, height: h, text: t.text, steps: []float64{1.5, 3, 5, 7.5, 11, 15}, turns: fan(math.Pi/9, 6)}
 		d.write(t.key, d.settle(q))
 	}
 }
@@ -125,7 +126,7 @@ func (d *draft) nameSpots() {
 		}
 		k := s.key
 		k.Feature += "/name"
-		q := place{at: d.at(s.at), height: d.ink.text, text: s.text, steps: []float64{1.2, 2.2, 3.5, 5.5}, turns: fan(math.Pi/8, 8)}
+		q := place{at: d.at(s.at), prefer: s.away, height: d.ink.text, text: s.text, steps: []float64{1.2, 2.2, 3.5, 5.5, 8}, turns: fan(math.Pi/8, 8)}
 		d.write(k, d.settle(q))
 	}
 }

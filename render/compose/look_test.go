@@ -120,3 +120,68 @@ func TestSmallPapers(t *testing.T) {
 	}
 	keep(t, sheet)
 }
+
+func TestTrueShapes(t *testing.T) {
+	h := rainHood(t)
+	for _, third := range []bool{false, true} {
+		front := elevation("front", subjects("B", h.B), "projectors", "cutting_planes", "focus")
+		front.Faint = subjects("K", h.K)
+		top := plan("top", subjects("B", h.B), front)
+		b := &scene.Block{Form: "sheet", Name: "truth1", Title: "Rain hood", Size: "A2", Titles: &scene.Titles{}, ThirdAngle: third,
+			Views: []*scene.View{front, top, trueShape("cut", h.S, front, "focus", "axis", "directrix"), pattern("flat", h.D, "generators", "numbers")},
+			Notes: []*scene.Note{{Name: "note", Text: "Pattern seen from outside. Slant 286.4 mm."}},
+			Dimensions: []*scene.Dimension{
+				{Name: "K.height", On: front, Anchor: scene.Linear{B: vec.V3{Z: 260}}, Text: "260"},
+				{Name: "K.base.diameter", On: top, Anchor: scene.Diameter{Circle: scene.Circle{F: vec.World, R: 120}}, Text: "240"},
+			},
+		}
+		if third {
+			b.Name = "truth3"
+		}
+		sheet, problems := Compose(&scene.Scene{}, b)
+		for _, p := range problems {
+			t.Log(p)
+		}
+		keep(t, sheet)
+	}
+}
+
+// TestFourCuts: one cone and four planes, each with its true shape.
+func TestFourCuts(t *testing.T) {
+	k := coneAt("K", 100, 220)
+	slope := vec.V3{X: -100, Z: 220}.Unit()
+	planes := []*scene.Plane{
+		planeAlong("circle", vec.V3{Z: 150}, vec.V3{X: 1}, vec.V3{Y: 1}),
+		planeAlong("ellipse", vec.V3{Z: 100}, vec.V3{X: 1, Z: 0.7}, vec.V3{Y: 1}),
+		planeAlong("parabola", vec.V3{X: -40}, slope.Neg(), vec.V3{Y: 1}),
+		planeAlong("hyperbola", vec.V3{X: 45}, vec.V3{Z: 1}, vec.V3{Y: 1}),
+	}
+	of := subjects("K", k)
+	var views []*scene.View
+	for _, p := range planes {
+		of = append(of, scene.Subject{Name: p.Name, Value: p})
+	}
+	sc := &scene.Scene{}
+	front := elevation("front", of, "focal_spheres", "focus")
+	top := plan("top", subjects("K", k), front)
+	views = append(views, front, top)
+	for i, p := range planes {
+		s := sectionOf(t, "S"+itoa(i+1), k, p)
+		sc.Things = append(sc.Things, &scene.Thing{Name: s.Name, Value: s})
+		from := front
+		if i == 0 {
+			from = nil
+		}
+		views = append(views, trueShape("true"+itoa(i+1), s, from, "focus", "axis", "directrix", "hatching"))
+		top.Of = append(top.Of, scene.Subject{Name: s.Name, Value: s})
+	}
+	b := &scene.Block{Form: "sheet", Name: "four", Title: "A cone and four planes", Size: "A1", Titles: &scene.Titles{}, Views: views}
+	sheet, problems := Compose(sc, b)
+	for _, p := range problems {
+		t.Log(p)
+	}
+	keep(t, sheet)
+	b.Size, b.Name = "A3", "four3"
+	sheet, _ = Compose(sc, b)
+	keep(t, sheet)
+}

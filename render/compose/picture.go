@@ -69,7 +69,8 @@ type track struct {
 type spot struct {
 	key   drawing.Key
 	at    vec.V2
-	cross bool // a cross, else a dot
+	cross bool   // a cross, else a dot
+	away  vec.V2 // the side on which its name stands best; zero: any
 	text  string
 }
 

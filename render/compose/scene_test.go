@@ -122,6 +122,7 @@ func rainHood(t testing.TB) hood {
 	h.K = coneAt("K", 120, 260)
 	h.P = planeAlong("P", vec.V3{X: 35}, vec.V3{X: 120, Z: 260}.Unit(), vec.V3{Y: 1})
 	h.B = partOf(t, "B", h.K, h.P, true)
+	h.S = sectionOf(t, "S", h.K, h.P)
 	h.D = patternOf(t, "D", h.B, math.Pi, 12, false)
 	return h
 }

@@ -71,11 +71,16 @@ func (p *picture) drawConic(name string, s *scene.Section, box drawing.Box) {
 			p.drawConicAxis(name, "axis/minor", s, o, x.Left())
 		}
 	}
+	for _, v := range c.Vertices() {
+		if within(box, p.flatten(v), sameLine) {
+			p.links = append(p.links, v)
+		}
+	}
 	if p.shows("focus") {
-		p.markConicPoints(name, "focus", "F", c.Foci(), box)
+		p.markConicPoints(name, "focus", "F", c.Foci(), box, func(vec.V2) vec.V2 { return x.Left() })
 	}
 	if p.shows("focus") || p.shows("directrix") {
-		p.markConicPoints(name, "vertex", "V", c.Vertices(), box)
+		p.markConicPoints(name, "vertex", "V", c.Vertices(), box, func(q vec.V2) vec.V2 { return q.Sub(box.Centre()).Unit() })
 	}
 	if p.shows("directrix") {
 		p.drawDirectrices(name, c, box, o, x)
@@ -93,14 +98,15 @@ func (p *picture) drawConicAxis(name, feature string, s *scene.Section, o, d vec
 	p.straight(p.key(name, feature), drawing.CentreLine, o.Along(d, lo), o.Along(d, hi)).over = centreOvershoot
 }
 
-// markConicPoints marks those points of a conic that lie on or near what is drawn.
-func (p *picture) markConicPoints(name, feature, letter string, pts []vec.V3, box drawing.Box) {
+// markConicPoints marks those points of a conic that lie on or near what is drawn;
+// away is the side for their names.
+func (p *picture) markConicPoints(name, feature, letter string, pts []vec.V3, box drawing.Box, away func(vec.V2) vec.V2) {
 	for i, q := range pts {
 		at := p.flatten(q)
 		if !within(box, at, nearShare) {
 			continue
 		}
-		p.spots = append(p.spots, spot{key: p.key(name, ordinal(feature, i+1)), at: at, text: numbered(letter, i, len(pts))})
+		p.spots = append(p.spots, spot{key: p.key(name, ordinal(feature, i+1)), at: at, away: away(at), text: numbered(letter, i, len(pts))})
 		p.links = append(p.links, q)
 	}
 }
@@ -112,7 +118,7 @@ func (p *picture) drawDirectrices(name string, c *cut.Conic, box drawing.Box, o,
 		foot := o.Along(x, p.flatten(d.C).Sub(o).Dot(x))
 		letter := numbered("d", i, len(all))
 		if !within(box, foot, nearShare) {
-			if i < len(vertices) {
+			if i < len(vertices) && within(box, p.flatten(vertices[i]), sameLine) {
 				far := p.flatten(vertices[i]).Dist(foot)
 				p.caption = append(p.caption, "Directrix "+letter+" lies "+length(far)+" from "+numbered("V", i, len(vertices))+".")
 			}
