@@ -2,6 +2,7 @@ package cli
 
 import (
 	"encoding/json"
+	"slices"
 
 	"epure/cmd/internal/build"
 	"epure/lang/diag"
@@ -57,6 +58,9 @@ func (s *session) drawUnits(units []*build.Unit) (status int, sum string, err er
 
 // sums is the line at the end.
 func sums(units []*build.Unit, drawings, written, kept int) string {
+	if drawings == 0 && !slices.ContainsFunc(units, (*build.Unit).Failed) {
+		return "nothing to draw: there is no sheet and no figure"
+	}
 	text := count(drawings, "drawing") + ": " + count(written, "file") + " written"
 	if kept > 0 {
 		text += ", " + count(kept, "file") + " unchanged"

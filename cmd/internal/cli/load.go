@@ -60,8 +60,12 @@ func apply(setting build.Setting, units []*build.Unit) error {
 func (s *session) report(units []*build.Unit, out diagWriter) (int, error) {
 	status := Done
 	for _, u := range units {
-		if err := out(u.Bag.Sorted()); err != nil {
+		ds := u.Bag.Sorted()
+		if err := out(ds[:min(len(ds), maxShown)]); err != nil {
 			return Failed, err
+		}
+		if len(ds) > maxShown {
+			s.say("%s: %d more are not shown", u.Name, len(ds)-maxShown)
 		}
 		if u.Failed() {
 			status = max(status, Wrong)
@@ -74,6 +78,10 @@ func (s *session) report(units []*build.Unit, out diagWriter) (int, error) {
 	}
 	return status, nil
 }
+
+// maxShown is how many diagnostics of one file are printed: more than anybody
+// mends at once.
+const maxShown = 100
 
 // diagWriter prints diagnostics.
 type diagWriter func([]diag.Diagnostic) error

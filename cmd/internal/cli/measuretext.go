@@ -24,6 +24,9 @@ func (r row) label() string {
 	return r.thing.Name + "." + r.measure
 }
 
+// bare says whether the row is all there is of its thing: a value or a given.
+func (r row) bare() bool { return r.thing.Form == "value" || r.thing.Form == "given" }
+
 // valueMeasure is the one measure of a value or a given.
 const valueMeasure = "value"
 
@@ -48,7 +51,7 @@ func textMeasures(w *bufio.Writer, s *scene.Scene, want selection) {
 		wide = max(wide, utf8.RuneCountInString(r.label()))
 	}
 	for i, r := range rows {
-		if i > 0 && (rows[i-1].thing != r.thing) && !(r.measure == valueMeasure && rows[i-1].measure == valueMeasure) {
+		if i > 0 && rows[i-1].thing != r.thing && !(r.bare() && rows[i-1].bare()) {
 			w.WriteByte('\n')
 		}
 		pad := strings.Repeat(" ", wide-utf8.RuneCountInString(r.label()))
