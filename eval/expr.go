@@ -8,7 +8,6 @@ import (
 	"epure/eval/forms"
 	"epure/eval/scene"
 	"epure/geom/vec"
-	"epure/lang/catalogue"
 	"epure/lang/diag"
 	"epure/lang/quantity"
 	"epure/lang/source"

@@ -122,10 +122,11 @@ func inside(s *scene.Solid, l *scene.Line, in body.Interval) scene.Linear {
 	return scene.Linear{A: l.From.Along(l.Along, a.Sub(l.From).Dot(l.Along)), B: l.From.Along(l.Along, b.Sub(l.From).Dot(l.Along))}
 }
 
-// origin returns the labels of the faces of s that came from v.
+// origin returns the faces of s that came from v, those that there still are.
 func origin(s *scene.Solid, v scene.Value) []int {
 	var out []int
-	for i, f := range s.Body.Faces {
+	for _, i := range all(s) {
+		f := s.Body.Faces[i]
 		switch v := v.(type) {
 		case *scene.Plane:
 			if f.Label == v.Name {
@@ -178,10 +179,13 @@ func faceMember(v scene.Value, args []scene.Value) (Measured, *Fail) {
 	return Measured{}, fail("several-features", "", "%s has several faces from %s", s.Name, nameOf(args[0])).because("they are %s", labels(s, found))
 }
 
+// all are the faces of s that there still are.
 func all(s *scene.Solid) []int {
 	var out []int
 	for i := range s.Body.Faces {
-		out = append(out, i)
+		if len(s.Body.FaceEdges(i)) > 0 {
+			out = append(out, i)
+		}
 	}
 	return out
 }

@@ -82,7 +82,8 @@ func sectionMeasures() map[string]MeasureFunc {
 		"semi_major": conicFunc("semi-major axis", central, func(k *cut.Conic) Measured { return halfAxis(k.F.O, k.F.X, k.A) }),
 		"semi_minor": conicFunc("semi-minor axis", central, func(k *cut.Conic) Measured { return halfAxis(k.F.O, k.F.Y, k.B) }),
 		"linear_eccentricity": conicFunc("linear eccentricity", central, func(k *cut.Conic) Measured {
-			return halfAxis(k.F.O, k.F.X, k.LinearEccentricity())
+			c, _ := k.LinearEccentricity()
+			return halfAxis(k.F.O, k.F.X, c)
 		}),
 		"focal_length": conicFunc("focal length", []cut.Kind{cut.Parabola}, func(k *cut.Conic) Measured { return halfAxis(k.F.O, k.F.X, k.A) }),
 		"latus_rectum": conicFunc("latus rectum", anyConic, func(k *cut.Conic) Measured {
@@ -90,7 +91,7 @@ func sectionMeasures() map[string]MeasureFunc {
 			return Measured{length(l), scene.Linear{A: f.Along(k.F.Y, -l/2), B: f.Along(k.F.Y, l/2)}}
 		}),
 		"asymptote_angle": conicFunc("asymptotes", []cut.Kind{cut.Hyperbola}, func(k *cut.Conic) Measured {
-			a := k.AsymptoteAngle()
+			a, _ := k.AsymptoteAngle()
 			s, c := math.Sincos(a)
 			return Measured{degrees(a), scene.Angle{Apex: k.F.O, A: k.F.X, B: k.F.X.Scale(c).Along(k.F.Y, s)}}
 		}),

@@ -170,7 +170,9 @@ func (c *checker) unknownForm(s *Symbol, form *syntax.Ident, block *Symbol) {
 			words = append(words, f.Word)
 		}
 	}
-	if w, ok := spell.Nearest(form.Text, words); ok {
+	if c.lookup(form.Text) != nil {
+		d = d.Because(source.Quote(form.Text) + " is a name; values are joined by operators, and `round(x, step)` rounds")
+	} else if w, ok := spell.Nearest(form.Text, words); ok {
 		d = d.WithFix(form.Span(), w)
 	} else {
 		d = d.Because("the forms here are " + list(words, "and"))

@@ -99,15 +99,11 @@ func (c *converter) thing(r *rowThing, end int) *Thing {
 	return &Thing{At: c.span(form.At.Start, end), Form: form, Text: c.textOrNil(r.Text), Clauses: c.clauses(r.Clauses)}
 }
 
-// clauses converts clauses. The step of a hole is none; it is left out.
+// clauses converts clauses.
 func (c *converter) clauses(rows []*rowClause) []Clause {
 	var out []Clause
 	for _, r := range rows {
 		cl := Clause{Word: c.ident(r.Word)}
-		if cl.Word.Text == "nearest" {
-			c.add(c.onlyInHoles(cl.Word.At))
-			continue
-		}
 		for _, e := range r.Exprs {
 			cl.Values = append(cl.Values, c.expr(e))
 		}

@@ -3,7 +3,6 @@ package syntax
 import (
 	"strings"
 
-	"epure/lang/diag"
 	"epure/lang/source"
 )
 
@@ -138,7 +137,8 @@ func (c *converter) misplaced(failed int) bool {
 	case t.kind == kindKeyword:
 		d.Text = c.quote(t) + " begins a statement and stands first in its line"
 	case t.is("nearest") && c.what != "hole":
-		d = c.onlyInHoles(d.Span)
+		d.Text = "`nearest` rounds in the holes of texts and as a clause"
+		d.Reason = "elsewhere `round(x, step)` rounds"
 	case t.is("=") && before.kind == kindName && c.what == "statement" && c.wantsValue(failed):
 		d.Code, d.Text = "misplaced-equals", "a clause takes its value without `=`"
 		d = d.WithFix(d.Span, "")
@@ -157,12 +157,6 @@ func (c *converter) misplaced(failed int) bool {
 	}
 	c.add(d)
 	return true
-}
-
-// onlyInHoles makes the diagnostic of nearest anywhere else.
-func (c *converter) onlyInHoles(at source.Span) diag.Diagnostic {
-	return diag.New("bad-statement", at, "`nearest` stands only in the holes of texts").
-		Because("elsewhere `round(x, step)` rounds")
 }
 
 // definesOther says whether what stands before the = at an index would be a value

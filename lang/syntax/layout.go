@@ -244,28 +244,29 @@ func (l *layout) lonelyBrace(i int) int {
 		d = d.WithLabelledFix(l.span(end, t.end), " {", "write it at the end of the line above")
 	}
 	l.add(d)
-	var owner Statement
-	if b := l.top(); len(b.list) > 0 {
-		owner = b.list[len(b.list)-1]
-	}
-	l.push(lastOwner(owner), t, t.column, false)
+	l.push(l.lastOwner(t), t, t.column, false)
 	return l.afterBrace(i)
 }
 
-// lastOwner returns s if a block can be given to it, else a Bad statement that
-// stands for nothing.
-func lastOwner(s Statement) Statement {
-	switch s := s.(type) {
-	case *Sentence:
-		if !s.HasBlock {
-			return s
-		}
-	case *Bad:
-		if !s.HasBlock {
-			return s
+// lastOwner returns the last statement if a block can be given to it, else a Bad
+// statement for the brace.
+func (l *layout) lastOwner(brace token) Statement {
+	b := l.top()
+	if len(b.list) > 0 {
+		switch s := b.list[len(b.list)-1].(type) {
+		case *Sentence:
+			if !s.HasBlock {
+				return s
+			}
+		case *Bad:
+			if !s.HasBlock {
+				return s
+			}
 		}
 	}
-	return &Bad{}
+	bad := &Bad{At: l.span(brace.start, brace.end)}
+	b.add(bad, brace.column)
+	return bad
 }
 
 // notClosed reports the block on top, which has no closing brace. Statements from
