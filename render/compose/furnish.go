@@ -1,6 +1,8 @@
 package compose
 
 import (
+	"strings"
+
 	"epure/eval/scene"
 	"epure/render/drawing"
 	"epure/render/furniture"
@@ -51,4 +53,25 @@ func (a *attempt) projections() int {
 		}
 	}
 	return n
+}
+
+// centringClear is how near, paper mm, things may come to the tips of the centring marks.
+const centringClear = 2
+
+// keepOut is what lies in the drawing space before anything is placed: the title
+// block and the tips of the centring marks.
+func keepOut(p furniture.Paper) []extent {
+	out := []extent{boxExtent(furniture.BlockBox(p))}
+	space := p.Space()
+	for _, m := range furniture.Frame(p) {
+		l, ok := m.Shape.(drawing.Line)
+		if !ok || !strings.HasPrefix(m.Key.Feature, "centring/") {
+			continue
+		}
+		tip := l.B.Along(l.A.Sub(l.B).Unit(), leastGap-centringClear)
+		if inner := (drawing.Box{Min: tip, Max: tip}); space.Holds(inner) {
+			out = append(out, nothing().with(tip).with(l.A))
+		}
+	}
+	return out
 }

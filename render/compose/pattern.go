@@ -36,6 +36,8 @@ func (p *picture) drawPattern(name string, d *scene.Development) {
 	p.addFaceSigns(name, d)
 	if len(p.caption) == 0 {
 		p.caption = append(p.caption, "Pattern of "+patternSubject(name, d)+", "+sideUp(d)+" up")
+	} else {
+		p.caption = append(p.caption, "Pattern, "+sideUp(d)+" up")
 	}
 }
 

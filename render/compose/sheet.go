@@ -85,7 +85,7 @@ func (j *job) tryScale(p furniture.Paper, scale float64, sets [][]*picture) *att
 		a := &attempt{scale: scale, drafts: j.drafts(set, scale)}
 		for _, width := range noteWidths() {
 			a.extras = j.extras(scale, width)
-			a.layout = j.layoutOf(a, space, []extent{boxExtent(furniture.BlockBox(p))})
+			a.layout = j.layoutOf(a, space, keepOut(p))
 			if a.layout.arrange() {
 				return a
 			}
