@@ -31,7 +31,7 @@ func checkCodes() []Entry {
 		c("unknown-measure", "A thing has no measure of that name.", cone+"a = K.hieght\n"),
 		c("unknown-name", "Nothing has that name here.", "a = 2*foot\n"),
 		c("unknown-word", "A clause does not take that word.", cone+"s = sheet \"S\" size A7 {\n    elevation of K\n}\n"),
-		c("wrong-count", "There are too many or too few points, arguments or coordinates.", "a = max()\nP = plane through (0, 0, 0)\nb = atan2(1 mm)\n"),
+		c("wrong-count", "There are too many or too few points, arguments or coordinates.", "P = plane through (0, 0, 0)\nb = atan2(1 mm)\n"),
 		c("wrong-kind", "A value is of another kind than its place takes.", "a = 3 mm + 2°\n"),
 		c("wrong-place", "A statement stands inside a block that belongs outside, or the other way round.", cone+"front = elevation of K\n"),
 	}
