@@ -1,6 +1,8 @@
 package view
 
 import (
+	"slices"
+
 	"epure/geom/body"
 	"epure/geom/curve"
 	"epure/geom/surface"
@@ -17,6 +19,7 @@ type cand struct {
 	err    float64 // rounding error of a point of it or of its image, mm
 	box    box
 	z0, z1 float64 // depths
+	hidden bool    // all of it lies in the shadow of one body
 	stops  []stop
 }
 
@@ -35,28 +38,48 @@ const (
 	atShared                // taken over from a curve with the same image
 )
 
-// candidates are those of every body, edges before contours.
+// candidates are those of every body, edges before contours, in that order.
 func (s *scene) candidates() []cand {
 	var out []cand
 	for i, b := range s.bodies {
-		for k, e := range append(b.Edges(), b.Contour(s.f.Z)...) {
+		for k, e := range append(slices.Clip(b.Edges()), b.Contour(s.f.Z)...) {
 			out = s.image(out, e, i, k)
 		}
+	}
+	return s.ready(out)
+}
+
+// wires are the candidates of extra curves.
+func (s *scene) wires(arcs []curve.Arc) []cand {
+	var out []cand
+	for i, a := range arcs {
+		out = s.image(out, body.Edge{Arc: a, A: i, B: i}, Wire, i)
+	}
+	return s.ready(out)
+}
+
+// image appends the candidates of one edge.
+func (s *scene) image(out []cand, e body.Edge, owner, index int) []cand {
+	err := Grain * (s.reach + reachOf(e.Arc))
+	for _, k := range tracks(e.Arc, s.f, err) {
+		c := cand{track: k, arc: e.Arc, body: owner, index: index, a: e.A, b: e.B, err: err, box: boxOf(k.image)}
+		c.z0, c.z1 = depths(c.inSpace(), s.f)
+		out = append(out, c)
 	}
 	return out
 }
 
-// image appends the candidates of one edge, with their ends and the stops where they meet bodies.
-func (s *scene) image(out []cand, e body.Edge, owner, index int) []cand {
-	err := Grain * (s.reach + reachOf(e.Arc))
-	z0, z1 := depths(e.Arc, s.f)
-	for _, k := range tracks(e.Arc, s.f, err) {
-		c := cand{track: k, arc: e.Arc, body: owner, index: index, a: e.A, b: e.B, err: err, box: boxOf(k.image), z0: z0, z1: z1}
-		c.stops = []stop{{t: k.t0, rank: atEnd}, {t: k.t1, rank: atEnd}}
-		s.meetBodies(&c)
-		out = append(out, c)
+// ready trims the candidates and gives them their ends and the stops where they meet bodies.
+func (s *scene) ready(cands []cand) []cand {
+	cands = trim(cands)
+	for i := range cands {
+		c := &cands[i]
+		c.stops = []stop{{t: c.t0, rank: atEnd}, {t: c.t1, rank: atEnd}}
+		if c.hidden = s.inShadow(c.inSpace(), c.err); !c.hidden {
+			s.meetBodies(c)
+		}
 	}
-	return out
+	return cands
 }
 
 // meetBodies stops c where its visibility may change without a crossing of
@@ -66,19 +89,16 @@ func (s *scene) image(out []cand, e body.Edge, owner, index int) []cand {
 func (s *scene) meetBodies(c *cand) {
 	for _, k := range s.at(c.box, c.z0, c.z1, c.err) {
 		for _, p := range s.contact[k] {
-			c.stopAt(atTurn, nil, c.part3().Cross(p.F.O, p.F.Z, c.err)...)
+			c.stopAt(atTurn, nil, c.inSpace().Cross(p.F.O, p.F.Z, c.err)...)
 		}
 		if k == c.body {
 			continue
 		}
 		for _, face := range s.bodies[k].Faces {
-			c.stopAt(atTurn, nil, surface.Cross(face.Surface, c.part3(), c.err)...)
+			c.stopAt(atTurn, nil, surface.Cross(face.Surface, c.inSpace(), c.err)...)
 		}
 	}
 }
-
-// part3 is the part of the space curve that c stands for.
-func (c *cand) part3() curve.Arc { return curve.Arc{Curve: c.arc.Curve, T0: c.t0, T1: c.t1} }
 
 // stopAt adds stops at those of the space parameters ts that lie within c.
 func (c *cand) stopAt(rank uint8, with *cand, ts ...float64) {

@@ -117,8 +117,7 @@ func (d *drawing) join() []Piece {
 // start of the parameter.
 func closeRing(out []Piece, from int, c *cand) []Piece {
 	last := len(out) - 1
-	whole := c.image.Form.Periodic() && c.t1-c.t0 > math.Pi && c.arc.Start().Dist(c.arc.End()) <= c.err
-	if !whole || last <= from {
+	if !c.whole() || last <= from {
 		return out
 	}
 	p, q := &out[from], &out[last]

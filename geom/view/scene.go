@@ -5,7 +5,6 @@ import (
 
 	"epure/geom/body"
 	"epure/geom/curve"
-	"epure/geom/num"
 	"epure/geom/surface"
 	"epure/geom/vec"
 )
@@ -59,24 +58,6 @@ func (s *scene) at(b box, lo, hi, e float64) []int {
 		}
 	}
 	return found
-}
-
-// covers counts the layers of material between p and the viewer, e being the
-// error of p, mm. What lies before p of an interval counts when its middle is
-// deeper than the body's bound for a point on its surface and the error of p together.
-func (s *scene) covers(p vec.V3, e float64) int {
-	q := s.f.Local(p)
-	n := 0
-	for _, k := range s.at(box{vec.V2{X: q.X, Y: q.Y}, vec.V2{X: q.X, Y: q.Y}}, q.Z, math.Inf(1), e) {
-		b := s.bodies[k]
-		for _, v := range b.Intervals(p, s.f.Z) {
-			a := max(v.A, 0)
-			if v.B > a && b.Depth(p.Along(s.f.Z, (a+v.B)/2)) < -float64(num.OnSurface*b.Size())-2*e {
-				n++
-			}
-		}
-	}
-	return n
 }
 
 // reachOf is the largest length that goes into a point of the arc, mm.

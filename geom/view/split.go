@@ -71,10 +71,22 @@ func (d *drawing) crossTwo(i, j int) {
 		}
 		return
 	}
+	if a.hidden || b.hidden {
+		return
+	}
 	pts, _ := curve.Meet(a.image, b.image, a.err+b.err)
 	for _, x := range pts {
-		a.stopAt(atCrossing, b, a.space(x.TA))
-		b.stopAt(atCrossing, a, b.space(x.TB))
+		s, t := a.space(x.TA), b.space(x.TB)
+		// Only what lies before a curve can hide it. Where both lie at one depth, within the
+		// blur of a crossing, either may.
+		ahead := b.arc.At(t).Sub(a.arc.At(s)).Dot(d.f.Z)
+		slack := a.blur(d.sizeOf(a)).closest + b.blur(d.sizeOf(b)).closest
+		if ahead > -slack {
+			a.stopAt(atCrossing, b, s)
+		}
+		if ahead < slack {
+			b.stopAt(atCrossing, a, t)
+		}
 	}
 }
 
@@ -205,7 +217,7 @@ func (d *drawing) decide() {
 		p := &d.pieces[k]
 		c := &d.cands[p.cand]
 		m := c.arc.At((p.t0 + p.t1) / 2)
-		p.layers = d.covers(m, c.err)
+		p.layers = d.scene.layers(m, c.err)
 		p.near = d.f.Local(m).Z
 	}
 }

@@ -40,7 +40,7 @@ type Piece struct {
 	// Visible tells that nothing lies before the piece. A piece that lies in a
 	// surface seen edge-on counts as visible when nothing else covers it.
 	Visible bool
-	Layers  int // the fewest layers of material that cover a point of it; 0 when visible
+	Layers  int // how many layers of material cover the middle of it, or of a part of it; 0 when visible
 
 	flat curve.Curve2 // a straight image's curve with the parameter of Space; Form 0 otherwise
 }
@@ -67,9 +67,6 @@ func Lines(bodies []*body.Body, f vec.Frame) []Piece {
 // as in Lines; those that coincide with lines of the bodies stay (see Without).
 func SplitBy(arcs []curve.Arc, bodies []*body.Body, f vec.Frame) []Piece {
 	s := newScene(bodies, f)
-	var wires []cand
-	for i, a := range arcs {
-		wires = s.image(wires, body.Edge{Arc: a, A: i, B: i}, Wire, i)
-	}
+	wires := s.wires(arcs)
 	return s.draw(append(wires, s.candidates()...), len(wires))
 }
