@@ -126,23 +126,23 @@ func inside(s *scene.Solid, l *scene.Line, in body.Interval) scene.Linear {
 func origin(s *scene.Solid, v scene.Value) []int {
 	var out []int
 	for _, i := range all(s) {
-		f := s.Body.Faces[i]
-		switch v := v.(type) {
-		case *scene.Plane:
-			if f.Label == v.Name {
+		if solid, ok := v.(*scene.Solid); ok {
+			if strings.HasPrefix(s.Body.Faces[i].Label, solid.Root.Name+".") {
 				out = append(out, i)
 			}
-		case *scene.Solid:
-			if strings.HasPrefix(f.Label, v.Root.Name+".") {
-				out = append(out, i)
-			}
-		case *scene.Face:
-			if f.Label == v.Label {
-				out = append(out, i)
-			}
+		} else if i == s.Body.FaceIndex(label(v)) {
+			out = append(out, i)
 		}
 	}
 	return out
+}
+
+// label is the label of the face that lies on a plane or is a face.
+func label(v scene.Value) string {
+	if f, ok := v.(*scene.Face); ok {
+		return f.Label
+	}
+	return nameOf(v)
 }
 
 // nameOf is how the source calls a plane, solid or face.
