@@ -85,17 +85,24 @@ func (u *Unit) Broken() bool {
 // Load reads a file, parses and checks it. What is wrong is in the unit's bag.
 func Load(h *host.Host, name string) *Unit {
 	u := &Unit{Name: host.DisplayName(name)}
+	u.guard(func() { u.open(h, name) })
+	if u.File != nil {
+		u.guard(u.parse)
+	}
+	return u
+}
+
+// open reads the file.
+func (u *Unit) open(h *host.Host, name string) {
 	text, err := read(h, name)
 	if name != Stdin {
 		u.Read = []watch.Input{input(name, text, err)}
 	}
 	if err != nil {
 		u.Bag.Add(unreadable(u.Name, err))
-		return u
+		return
 	}
 	u.File = source.New(u.Name, text)
-	u.guard(u.parse)
-	return u
 }
 
 func read(h *host.Host, name string) ([]byte, error) {

@@ -53,17 +53,13 @@ func (s *session) drawUnits(units []*build.Unit) (status int, sum string, err er
 			}
 		}
 	}
-	return status, sums(units, drawings, written, kept), nil
+	return status, sums(units, drawings, results(drawings, written, kept)), nil
 }
 
 // sums is the line at the end.
-func sums(units []*build.Unit, drawings, written, kept int) string {
+func sums(units []*build.Unit, drawings int, written string) string {
 	if drawings == 0 && !slices.ContainsFunc(units, (*build.Unit).Failed) {
 		return "nothing to draw: there is no sheet and no figure"
-	}
-	text := count(drawings, "drawing") + ": " + count(written, "file") + " written"
-	if kept > 0 {
-		text += ", " + count(kept, "file") + " unchanged"
 	}
 	failed := 0
 	for _, u := range units {
@@ -71,14 +67,30 @@ func sums(units []*build.Unit, drawings, written, kept int) string {
 			failed++
 		}
 	}
-	if failed > 0 {
-		text += "; nothing drawn of " + count(failed, "file") + " with errors"
+	switch {
+	case failed == len(units):
+		return "nothing drawn: " + count(failed, "file") + " with errors"
+	case failed > 0:
+		return written + "; nothing drawn of " + count(failed, "file") + " with errors"
+	}
+	return written
+}
+
+// results counts what was written.
+func results(drawings, written, kept int) string {
+	text := count(drawings, "drawing") + ": " + count(written, "file") + " written"
+	if kept > 0 {
+		text += ", " + count(kept, "file") + " unchanged"
 	}
 	return text
 }
 
 // announce prints the name of an output that is now up to date.
+// One who watches wants to know what has changed.
 func (s *session) announce(u *build.Unit, o build.Outcome) error {
+	if s.call.Verb == "watch" && !o.Changed {
+		return nil
+	}
 	if s.call.JSON {
 		return json.NewEncoder(s.data).Encode(object{{"file", u.Name}, {"output", o.Path}, {"changed", o.Changed}})
 	}
