@@ -2,7 +2,6 @@ package compose
 
 import (
 	"math"
-	"sort"
 
 	"epure/geom/vec"
 	"epure/render/drawing"
@@ -10,17 +9,17 @@ import (
 
 // Arrangement. Views that stand in projection are one cluster: each child lies
 // on the line of its projectors as near to its parent as the room of all
-// members lets it. Clusters, tables and notes are then put into the space, the
-// largest first, each as near to its corner as it can lie without touching. A handful of
-// choices of corners is tried; of those that succeed the roomiest is kept, and
-// last the free distances are evened out.
+// members lets it. Clusters, tables and notes are then put into the space, one
+// after the other, each as near to one of the corners as it can lie without
+// touching. Several orders and corners are tried; of the first few that succeed
+// the roomiest is kept, after its free distances have been evened out.
 //
 // There is no chance in it: the same views give the same sheet.
 
 // Distances between the rooms of things, paper mm. Rooms hold overshoots,
 // dimensions and captions already, so outlines stand 10 to 15 mm apart at least.
 const (
-	leastGap  = 7.0
+	leastGap  = 6.0
 	leastEdge = 3.0  // to the frame
 	bestGap   = 30.0 // views in projection are not spread farther than this
 )
@@ -52,8 +51,6 @@ type layout struct {
 	space   drawing.Box
 	blocked []extent // title block and the like
 	items   []item
-	order   []int // the roots of clusters as they are placed
-	placed  []bool
 	tight   bool // things stay where they were put: nothing is evened out
 }
 
@@ -111,6 +108,52 @@ func apartAlong(a, b extent, u vec.V2, gap float64) float64 {
 	return best
 }
 
+// cluster is a group of items that keep their places among each other.
+type cluster struct {
+	members []int
+	rooms   []extent // of the members, where they lie before the cluster is placed
+	box     drawing.Box
+	area    float64
+	kind    kind
+	fixed   bool
+}
+
+// clusters packs and lists the clusters, in file order of their roots.
+func (l *layout) clusters() []cluster {
+	var out []cluster
+	for i, t := range l.items {
+		if t.parent >= 0 && !t.fixed {
+			continue
+		}
+		c := cluster{members: l.clusterOf(i), kind: t.kind, fixed: t.fixed}
+		l.pack(c.members)
+		all := nothing()
+		for _, m := range c.members {
+			e := l.items[m].here()
+			c.rooms, c.area, all = append(c.rooms, e), c.area+e.area(), all.union(e)
+		}
+		c.box = all.box()
+		out = append(out, c)
+	}
+	return out
+}
+
+// mayFit weeds out what cannot fit: a cluster larger than the space, or more
+// area than there is.
+func (l *layout) mayFit(all []cluster) bool {
+	area, s := 0.0, l.space.Grow(-leastEdge)
+	for _, c := range all {
+		if c.box.Width() > s.Width() || c.box.Height() > s.Height() {
+			return false
+		}
+		area += c.area
+	}
+	for _, e := range l.blocked {
+		area += e.area()
+	}
+	return area <= s.Width()*s.Height()
+}
+
 // enoughTries is the number of arrangements among which the roomiest is chosen.
 const enoughTries = 4
 
@@ -120,26 +163,23 @@ const laterCost = 2
 
 // arrange places all items. It reports whether they fit.
 func (l *layout) arrange() bool {
-	roots := l.roots()
-	if !l.mayFit(roots) {
+	all := l.clusters()
+	if !l.mayFit(all) {
 		return false
 	}
-	var best []item
-	bestScore, found := math.Inf(-1), 0
 	start := append([]item(nil), l.items...)
-	for _, s := range strategies() {
+	var best []item
+	bestScore := math.Inf(-1)
+	for i, shifts := range l.search(all) {
 		copy(l.items, start)
-		if !l.try(s, roots) {
-			continue
+		for c, d := range shifts {
+			l.shift(all[c].members, d)
 		}
 		if !l.tight {
-			l.even()
+			l.even(all)
 		}
-		if score := l.airiness() - float64(found)*laterCost; score > bestScore+slack {
+		if score := l.airiness() - float64(i)*laterCost; score > bestScore+slack {
 			bestScore, best = score, append([]item(nil), l.items...)
-		}
-		if found++; found == enoughTries {
-			break
 		}
 	}
 	if best == nil {
@@ -149,108 +189,10 @@ func (l *layout) arrange() bool {
 	return true
 }
 
-// roots packs all clusters and lists their roots in file order.
-func (l *layout) roots() []int {
-	var roots []int
-	for i, t := range l.items {
-		if t.parent < 0 || t.fixed {
-			l.pack(l.clusterOf(i))
-			roots = append(roots, i)
-		}
+func (l *layout) shift(members []int, d vec.V2) {
+	for _, m := range members {
+		l.items[m].at = l.items[m].at.Add(d)
 	}
-	return roots
-}
-
-// clusterRoom is the extent of a cluster where it lies now.
-func (l *layout) clusterRoom(root int) extent {
-	e := nothing()
-	for _, m := range l.clusterOf(root) {
-		e = e.union(l.items[m].here())
-	}
-	return e
-}
-
-// mayFit weeds out what cannot fit: a cluster larger than the space, or more
-// area than there is.
-func (l *layout) mayFit(roots []int) bool {
-	area := 0.0
-	for _, r := range roots {
-		b := l.clusterRoom(r).box()
-		if b.Width() > l.space.Width()-2*leastEdge || b.Height() > l.space.Height()-2*leastEdge {
-			return false
-		}
-		for _, m := range l.clusterOf(r) {
-			area += l.items[m].room.area()
-		}
-	}
-	for _, e := range l.blocked {
-		area += e.area()
-	}
-	return area <= l.space.Width()*l.space.Height()
-}
-
-// try places every cluster by one strategy.
-func (l *layout) try(s strategy, roots []int) bool {
-	l.placed = make([]bool, len(l.items))
-	for i, t := range l.items {
-		l.placed[i] = t.fixed
-	}
-	l.order = l.sorted(s, roots)
-	for _, r := range l.order {
-		members := l.clusterOf(r)
-		if !l.items[r].fixed && !l.drop(members, l.cornerFor(s, r, roots)) {
-			return false
-		}
-		for _, m := range members {
-			l.placed[m] = true
-		}
-	}
-	return true
-}
-
-// mainRoot is the first cluster of views, the one that the sheet is about.
-func (l *layout) mainRoot(roots []int) int {
-	for _, r := range roots {
-		if l.items[r].kind == viewItem {
-			return r
-		}
-	}
-	return -1
-}
-
-func (l *layout) cornerFor(s strategy, root int, roots []int) corner {
-	switch {
-	case root == l.mainRoot(roots):
-		return s.main
-	case l.items[root].kind == tableItem:
-		return s.tables
-	case l.items[root].kind == noteItem:
-		return bottomRight
-	}
-	return s.views
-}
-
-// sorted orders clusters: fixed ones, the main one, views by area, tables, notes.
-func (l *layout) sorted(s strategy, roots []int) []int {
-	out := append([]int(nil), roots...)
-	main := l.mainRoot(roots)
-	rank := func(r int) int {
-		switch {
-		case l.items[r].fixed:
-			return 0
-		case r == main:
-			return 1
-		}
-		return 2 + int(l.items[r].kind)
-	}
-	sort.SliceStable(out, func(i, j int) bool {
-		a, b := out[i], out[j]
-		if rank(a) != rank(b) {
-			return rank(a) < rank(b)
-		}
-		return !s.fileOrder && l.clusterRoom(a).area() > l.clusterRoom(b).area()
-	})
-	return out
 }
 
 // airiness is the least gap between any two things, up to bestGap; then the mean

@@ -8,19 +8,18 @@ import (
 
 // Evening out. Every free cluster is moved to the middle of the room that it
 // has to either side, every view in projection along its projectors likewise,
-// again and again until nothing moves much. Notes stay in their corner, and tables
-// move up and down only.
+// again and again until nothing moves much. Notes stay in their corner.
 
 // evenRounds bounds the rounds; each halves what is uneven, so that after thirty nothing
 // is left to see.
 const evenRounds = 30
 
 // even evens out the distances of the arrangement.
-func (l *layout) even() {
+func (l *layout) even(all []cluster) {
 	for range evenRounds {
 		moved := 0.0
-		for _, r := range l.order {
-			moved += l.evenCluster(r)
+		for i := range all {
+			moved += l.evenCluster(&all[i])
 		}
 		if moved < 0.01 { // a hundredth of a millimetre over the whole sheet cannot be seen
 			return
@@ -28,24 +27,21 @@ func (l *layout) even() {
 	}
 }
 
-func (l *layout) evenCluster(root int) float64 {
-	members := l.clusterOf(root)
+func (l *layout) evenCluster(c *cluster) float64 {
 	moved := 0.0
-	axes := []vec.V2{{X: 1}, {Y: 1}}
-	switch l.items[root].kind {
-	case tableItem:
-		axes = axes[1:] // tables stay flush with their margin
-	case noteItem:
+	if c.kind == noteItem {
 		return 0
 	}
-	for _, m := range members[1:] {
+	for _, m := range c.members[1:] {
 		moved += l.evenChild(m)
 	}
-	if l.items[root].fixed {
+	if c.fixed {
 		return moved
 	}
-	for _, u := range axes {
-		moved += l.shift(members, u, (l.travel(members, u)-l.travel(members, u.Scale(-1)))/2)
+	for _, u := range []vec.V2{{X: 1}, {Y: 1}} {
+		by := (l.travel(c.members, u) - l.travel(c.members, u.Scale(-1))) / 2
+		l.shift(c.members, u.Scale(by))
+		moved += math.Abs(by)
 	}
 	return moved
 }
@@ -57,13 +53,8 @@ func (l *layout) evenChild(m int) float64 {
 	members := l.clusterOf(m)
 	out, back := l.travel(members, t.toward), l.travel(members, t.toward.Scale(-1))
 	now := t.here().gap(l.items[t.parent].here())
-	return l.shift(members, t.toward, max(-back, min((out-back)/2, bestGap-now)))
-}
-
-func (l *layout) shift(members []int, u vec.V2, by float64) float64 {
-	for _, m := range members {
-		l.items[m].at = l.items[m].at.Along(u, by)
-	}
+	by := max(-back, min((out-back)/2, bestGap-now))
+	l.shift(members, t.toward.Scale(by))
 	return math.Abs(by)
 }
 

@@ -70,6 +70,14 @@ func (e extent) moved(d vec.V2) extent {
 	return e
 }
 
+// grown returns e with every side moved out by m mm.
+func (e extent) grown(m float64) extent {
+	for i := range e.lo {
+		e.lo[i], e.hi[i] = e.lo[i]-m, e.hi[i]+m
+	}
+	return e
+}
+
 // gap is the clear distance between two extents along the best of the eight
 // directions: never more than the true one; negative when they overlap.
 func (e extent) gap(o extent) float64 {
@@ -78,17 +86,6 @@ func (e extent) gap(o extent) float64 {
 		g = max(g, e.lo[i]-o.hi[i], o.lo[i]-e.hi[i])
 	}
 	return g
-}
-
-// clears reports whether the gap to o is at least g. It is gap, stopping at the
-// first direction that will do.
-func (e *extent) clears(o *extent, g float64) bool {
-	for _, i := range [compassSize]int{0, upright, 2, 6, 1, 3, 5, 7} {
-		if e.lo[i]-o.hi[i] >= g || o.lo[i]-e.hi[i] >= g {
-			return true
-		}
-	}
-	return false
 }
 
 // area is the area of the sixteen-sided figure, mm², from its support distances.

@@ -28,6 +28,7 @@ func (j *job) figure() *drawing.Sheet {
 		j.report(Problem{Span: j.block.Span, Code: SheetFull, Text: "the figure has no scale at which its views fit", Fatal: true})
 		return nil
 	}
+	j.compact(a)
 	b := a.content().Grow(figureMargin)
 	if width > 0 && b.Width() > width+slack {
 		j.report(Problem{Span: j.block.Span, Code: SheetFull, Fatal: true,
@@ -119,6 +120,25 @@ func (j *job) figureAt(sets [][]*picture, scale, width, height float64) *attempt
 		}
 	}
 	return nil
+}
+
+// compactSteps halves the height that a figure does not need: after five it is
+// within a thirtieth of the least.
+const compactSteps = 5
+
+// compact arranges the figure in the least height in which it goes.
+func (j *job) compact(a *attempt) {
+	space := a.layout.space
+	lo, hi := 0.0, space.Height()
+	for range compactSteps {
+		h := (lo + hi) / 2
+		l := j.layoutOf(a, drawing.BoxAt(space.Min, space.Width(), h), nil)
+		if l.tight = true; l.arrange() {
+			a.layout, hi = l, h
+		} else {
+			lo = h
+		}
+	}
 }
 
 // content is the box of everything placed.

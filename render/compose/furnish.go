@@ -55,22 +55,17 @@ func (a *attempt) projections() int {
 	return n
 }
 
-// centringClear is how near, paper mm, things may come to the tips of the centring marks.
+// centringClear is how near, paper mm, things may come to the centring marks.
 const centringClear = 2
 
 // keepOut is what lies in the drawing space before anything is placed: the title
-// block and the tips of the centring marks.
+// block and the centring marks. The marks need less room round them than views
+// do, so their extents are taken in by the difference, to less than nothing.
 func keepOut(p furniture.Paper) []extent {
 	out := []extent{boxExtent(furniture.BlockBox(p))}
-	space := p.Space()
 	for _, m := range furniture.Frame(p) {
-		l, ok := m.Shape.(drawing.Line)
-		if !ok || !strings.HasPrefix(m.Key.Feature, "centring/") {
-			continue
-		}
-		tip := l.B.Along(l.A.Sub(l.B).Unit(), leastGap-centringClear)
-		if inner := (drawing.Box{Min: tip, Max: tip}); space.Holds(inner) {
-			out = append(out, nothing().with(tip).with(l.A))
+		if strings.HasPrefix(m.Key.Feature, "centring/") {
+			out = append(out, shapeExtent(m.Shape).grown(centringClear-leastGap))
 		}
 	}
 	return out

@@ -87,8 +87,9 @@ func fan(step float64, n int) []float64 {
 	return out
 }
 
-// crowdedRow is the least distance in heights of lettering between the numbers of a row.
-const crowdedRow = 1.6
+// rowGap is the least gap between the numbers of a row, paper mm: what a word
+// keeps clear of another, and as much again where the row runs aslant.
+const rowGap = 2 * (lettersClear + wordsClear)
 
 // drawTags writes the short texts beside points. Of a crowded row only every
 // second, fifth, tenth ... is written.
@@ -98,7 +99,7 @@ func (d *draft) drawTags() {
 		if t.small {
 			h = d.ink.small
 		}
-		if t.row > 1 && (t.row-1)%rowStep(t.room*d.scale, h*crowdedRow) != 0 {
+		if t.row > 1 && (t.row-1)%rowStep(t.room*d.scale, font.Width(t.wide, h, false)+rowGap) != 0 {
 			continue
 		}
 		q := place{at: d.at(t.at), prefer: t.away, past: t.past, height: h, text: t.text, steps: []float64{1.5, 3, 5, 7.5, 11, 15}, turns: fan(math.Pi/9, 6)}

@@ -86,12 +86,11 @@ func (p *picture) addCorners() {
 	}
 }
 
-// drawThings draws what a view is of besides solids.
+// drawThings draws what a view is of besides solids; planes last, since they give
+// way to all other lines.
 func (p *picture) drawThings() {
 	for _, s := range p.view.Of {
 		switch v := s.Value.(type) {
-		case *scene.Plane:
-			p.drawPlane(s.Name, v, nil)
 		case *scene.Line:
 			p.drawLine(s.Name, v)
 		case *scene.Section:
@@ -105,6 +104,11 @@ func (p *picture) drawThings() {
 		case scene.Triple:
 			p.spots = append(p.spots, spot{key: p.key(s.Name, "point"), at: p.flatten(v.V), cross: true, text: s.Name})
 			p.links = append(p.links, v.V)
+		}
+	}
+	for _, s := range p.view.Of {
+		if v, ok := s.Value.(*scene.Plane); ok {
+			p.drawPlane(s.Name, v, nil)
 		}
 	}
 }
@@ -134,6 +138,7 @@ func faceArcs(f *scene.Face) []curve.Arc {
 // lies on a line of the view is left out.
 func (p *picture) drawWires(thing, stem string, role drawing.Role, arcs []curve.Arc) {
 	pieces := view.Without(view.SplitBy(arcs, p.bodies(), p.frame), p.pieces)
+	p.wires = append(p.wires, pieces...)
 	for i, l := range pieces {
 		k := p.key(thing, ordinal(stem, i+1))
 		switch {

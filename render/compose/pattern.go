@@ -35,10 +35,9 @@ func (p *picture) drawPattern(name string, d *scene.Development) {
 	p.drawStations(name, d)
 	p.addFaceSigns(name, d)
 	if len(p.caption) == 0 {
-		p.caption = append(p.caption, "Pattern of "+patternSubject(name, d)+", "+sideUp(d)+" up")
-	} else {
-		p.caption = append(p.caption, "Pattern, "+sideUp(d)+" up")
+		p.caption = []string{"Pattern of " + patternSubject(name, d)}
 	}
+	p.caption[0] += ", " + sideUp(d) + " up"
 }
 
 // patternSubject is the solid whose pattern it is.
@@ -120,9 +119,9 @@ func (p *picture) tagStation(k drawing.Key, d *scene.Development, i int, text st
 	away := high.High.Sub(low.Low).Unit()
 	outer, inner := k, k
 	inner.Feature += "/inner"
-	p.tags = append(p.tags, tag{key: outer, at: high.High, away: away, text: text, small: true, room: rowRoom(d, i, true), row: st.Number})
+	p.tags = append(p.tags, tag{key: outer, at: high.High, away: away, text: text, small: true, room: rowRoom(d, i, true), row: st.Number, wide: itoa(d.Divisions)})
 	if room := rowRoom(d, i, false); room > 0 {
-		p.tags = append(p.tags, tag{key: inner, at: low.Low, away: vec.V2{X: 0 - away.X, Y: 0 - away.Y}, text: text, small: true, room: room, row: st.Number})
+		p.tags = append(p.tags, tag{key: inner, at: low.Low, away: vec.V2{X: 0 - away.X, Y: 0 - away.Y}, text: text, small: true, room: room, row: st.Number, wide: itoa(d.Divisions)})
 	}
 }
 

@@ -24,6 +24,7 @@ type picture struct {
 	solids    []solid
 	flat      *scene.Development // of a pattern
 	pieces    []view.Piece       // what is seen and hidden of the solids
+	wires     []view.Piece       // and of other curves in it
 	strokes   []stroke
 	spots     []spot
 	tags      []tag
@@ -82,7 +83,8 @@ type tag struct {
 	text  string
 	small bool
 	row   int     // its number in the row of texts that it belongs to; 0: none
-	room  float64 // view mm to the next text of its row; 0: it stands alone
+	room  float64 // view mm to the next text of its row
+	wide  string  // the widest text of its row
 	past  float64 // paper mm beyond at, along away, from which the distance counts
 }
 

@@ -159,7 +159,8 @@ func (p *picture) drawMiddle(name string, a, b vec.V2) {
 		return
 	}
 	line := view.Piece{Image: curve.Segment2(a, b), Space: curve.Segment(p.frame.Lift(a), p.frame.Lift(b)), Body: view.Wire, Visible: true}
-	for i, l := range view.Without([]view.Piece{line}, p.pieces) {
+	lines := append(p.pieces[:len(p.pieces):len(p.pieces)], p.wires...)
+	for i, l := range view.Without([]view.Piece{line}, lines) {
 		p.draw(p.key(name, ordinal("plane", i+1)), drawing.CuttingPlane, l.Image).pen = drawing.Group.Centre
 	}
 }

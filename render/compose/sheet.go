@@ -225,19 +225,18 @@ func (j *job) excess(p furniture.Paper, scale float64, set []*picture) string {
 	a := &attempt{scale: scale, drafts: j.drafts(set, scale), extras: j.extras(scale, noteWidths()[0])}
 	s, area := p.Space(), furniture.BlockWidth*furniture.BlockHeight
 	l := j.layoutOf(a, s, nil)
-	for _, r := range l.roots() {
-		members := l.clusterOf(r)
-		var names []string
-		for _, m := range members {
-			if m < len(a.drafts) {
-				names = append(names, a.drafts[m].p.name)
-			}
-			area += l.items[m].room.area()
+	for _, c := range l.clusters() {
+		area += c.area
+		if c.kind != viewItem {
+			continue
 		}
-		b := l.clusterRoom(r).box()
-		if over := max(b.Width()-s.Width(), b.Height()-s.Height()) + 2*leastEdge; over > 0 && len(names) > 0 {
+		var names []string
+		for _, m := range c.members {
+			names = append(names, a.drafts[m].p.name)
+		}
+		if over := max(c.box.Width()-s.Width(), c.box.Height()-s.Height()) + 2*leastEdge; over > 0 {
 			return fmt.Sprintf(": %s with all that belongs there needs %.0f by %.0f mm, %.0f mm more than the drawing space of %.0f by %.0f mm",
-				listed(names), b.Width(), b.Height(), over, s.Width(), s.Height())
+				listed(names), c.box.Width(), c.box.Height(), over, s.Width(), s.Height())
 		}
 	}
 	return fmt.Sprintf(": their areas alone come to %.0f %% of the drawing space", 100*area/(s.Width()*s.Height()))
