@@ -18,6 +18,10 @@ const (
 	figureTall   = 250.0 // its height, at most, while its scale is open
 )
 
+// figurePage is the largest page of a figure: 5 m either way, what a reader of
+// PDF can still show (14400 units of 1/72 inch).
+func figurePage() drawing.Box { return drawing.BoxAt(vec.V2{}, 5000, 5000) }
+
 // figure composes a figure.
 func (j *job) figure() *drawing.Sheet {
 	j.ink = inkFor(drawing.Group05())
@@ -25,7 +29,11 @@ func (j *job) figure() *drawing.Sheet {
 	width := j.block.Width
 	a := j.figureAttempt(sets, width)
 	if a == nil {
-		j.report(Problem{Span: j.block.Span, Code: SheetFull, Text: "the figure has no scale at which its views fit", Fatal: true})
+		text := "the figure has no scale at which its views fit"
+		if s := j.block.Scale; s > 0 {
+			text = "the figure is too large at " + scaleText(s) + j.tooLarge(sets[0], s, figurePage())
+		}
+		j.report(Problem{Span: j.block.Span, Code: SheetFull, Text: text, Fatal: true})
 		return nil
 	}
 	j.compact(a)
@@ -52,6 +60,9 @@ func (j *job) figureAttempt(sets [][]*picture, width float64) *attempt {
 		room := width
 		if room == 0 {
 			room = math.Inf(1)
+		}
+		if !j.mayFit(sets[0], j.block.Scale, figurePage()) {
+			return nil
 		}
 		if a := j.figureAt(sets, j.block.Scale, room, math.Inf(1)); a != nil {
 			return a

@@ -5,7 +5,51 @@ import (
 
 	"epure/eval/scene"
 	"epure/geom/vec"
+	"epure/render/drawing"
 )
+
+// Whole sheets, as a draughtsman would hand them over. They are kept for the eye
+// on request; what a test can see of them is checked on every run.
+
+// looked composes a block, keeps it, and fails when there is a problem, when two
+// things lie too near each other, or when lettering lies on lettering.
+func looked(t *testing.T, sc *scene.Scene, b *scene.Block) {
+	t.Helper()
+	if sc == nil {
+		sc = &scene.Scene{}
+	}
+	sheet, problems := Compose(sc, b)
+	for _, p := range problems {
+		t.Errorf("%s: %v", b.Name, p)
+	}
+	if sheet == nil {
+		t.Fatalf("%s: no sheet", b.Name)
+	}
+	keep(t, sheet)
+	if b.Form == "sheet" {
+		_, a := trial(t, b)
+		checkClear(t, b.Name, a)
+	}
+	checkWords(t, sheet)
+}
+
+// checkWords fails when two texts share room.
+func checkWords(t *testing.T, s *drawing.Sheet) {
+	t.Helper()
+	var texts []drawing.Text
+	for _, m := range s.Marks {
+		if x, ok := m.Shape.(drawing.Text); ok {
+			texts = append(texts, x)
+		}
+	}
+	for i, x := range texts {
+		for _, y := range texts[:i] {
+			if textRoom(x).grown(-0.05).overlaps(textRoom(y)) {
+				t.Errorf("%s: %q at %.1f lies on %q at %.1f", s.Name, x.String, x.At, y.String, y.At)
+			}
+		}
+	}
+}
 
 func TestRainHood(t *testing.T) {
 	h := rainHood(t)
@@ -27,14 +71,13 @@ func TestRainHood(t *testing.T) {
 		Labels: []*scene.Label{{Name: "tip", Text: "apex", At: vec.V3{Z: 260}, On: []*scene.View{front, top}}, {Name: "eave", Text: "cut edge, a parabola", At: vec.V3{X: 56.25, Z: 46.04}, On: []*scene.View{front}}},
 		Tables: []*scene.Table{{Name: "table", Title: "True lengths of D", Rows: [][]string{{"No.", "from seam", "true length mm"}, {"1", "0.00°", "286.4"}, {"2", "30.00°", "286.4"}, {"3", "60.00°", "286.4"}, {"a", "73.05°", "286.4"}, {"4", "90°", "251.9"}}}},
 	}
-	sheet, problems := Compose(&scene.Scene{}, b)
-	for _, p := range problems {
-		t.Log(p)
+	if _, problems := Compose(&scene.Scene{}, b); len(problems) != 1 || problems[0].Code != NotTrue {
+		t.Errorf("problems %v, want that of the height on the plan", problems)
 	}
-	keep(t, sheet)
+	b.Dimensions = b.Dimensions[:len(b.Dimensions)-1]
+	looked(t, nil, b)
 	b.ThirdAngle, b.Name, b.Size = true, "hood3", "A3"
-	sheet, _ = Compose(&scene.Scene{}, b)
-	keep(t, sheet)
+	looked(t, nil, b)
 }
 
 func TestGenerators(t *testing.T) {
@@ -43,11 +86,7 @@ func TestGenerators(t *testing.T) {
 	top := plan("top", subjects("B", h.B), front, "generators", "numbers")
 	b := &scene.Block{Form: "sheet", Name: "gens", Title: "Rain hood, the lines", Size: "A2", Titles: &scene.Titles{},
 		Views: []*scene.View{front, top, pattern("flat", h.D, "generators", "numbers")}}
-	sheet, problems := Compose(&scene.Scene{}, b)
-	for _, p := range problems {
-		t.Log(p)
-	}
-	keep(t, sheet)
+	looked(t, nil, b)
 	pipe := frustumAt("C", vec.V3{}, vec.V3{Z: 1}, 75, 75, 300)
 	roof := planeAlong("roof", vec.V3{Z: 120}, vec.V3{X: 1, Z: 0.7}, vec.V3{Y: 1})
 	q := partOf(t, "Q", pipe, roof, false)
@@ -55,11 +94,7 @@ func TestGenerators(t *testing.T) {
 	top = plan("top", subjects("Q", q), front, "generators", "numbers")
 	b = &scene.Block{Form: "sheet", Name: "pipe", Title: "Pipe through a roof", Size: "A3", Titles: &scene.Titles{},
 		Views: []*scene.View{front, top, pattern("flat", patternOf(t, "D", q, 0, 12, true), "generators", "numbers")}}
-	sheet, problems = Compose(&scene.Scene{}, b)
-	for _, p := range problems {
-		t.Log(p)
-	}
-	keep(t, sheet)
+	looked(t, nil, b)
 }
 
 func TestAuxiliary(t *testing.T) {
@@ -77,17 +112,9 @@ func TestAuxiliary(t *testing.T) {
 		if third {
 			b.Name = "aux3"
 		}
-		sheet, problems := Compose(&scene.Scene{}, b)
-		for _, p := range problems {
-			t.Log(p)
-		}
-		keep(t, sheet)
+		looked(t, nil, b)
 		b.Form, b.Width, b.Name = "figure", 160, b.Name+"fig"
-		sheet, problems = Compose(&scene.Scene{}, b)
-		for _, p := range problems {
-			t.Log(p)
-		}
-		keep(t, sheet)
+		looked(t, nil, b)
 	}
 }
 
@@ -108,17 +135,9 @@ func TestSmallPapers(t *testing.T) {
 		Tables: []*scene.Table{{Name: "table", Title: "True lengths of D", Rows: [][]string{{"No.", "from seam", "true length mm"}, {"1", "0.00°", "286.4"}, {"2", "30.00°", "286.4"}, {"3", "60.00°", "286.4"}, {"a", "73.05°", "286.4"}, {"4", "90°", "251.9"}}}},
 	}
 	b.Dimensions[2].On, b.Dimensions[3].On = b.Views[2], b.Views[2]
-	sheet, problems := Compose(&scene.Scene{}, b)
-	for _, p := range problems {
-		t.Log(p)
-	}
-	keep(t, sheet)
+	looked(t, nil, b)
 	b.Form, b.Name = "figure", "fig"
-	sheet, problems = Compose(&scene.Scene{}, b)
-	for _, p := range problems {
-		t.Log(p)
-	}
-	keep(t, sheet)
+	looked(t, nil, b)
 }
 
 func TestTrueShapes(t *testing.T) {
@@ -138,11 +157,7 @@ func TestTrueShapes(t *testing.T) {
 		if third {
 			b.Name = "truth3"
 		}
-		sheet, problems := Compose(&scene.Scene{}, b)
-		for _, p := range problems {
-			t.Log(p)
-		}
-		keep(t, sheet)
+		looked(t, nil, b)
 	}
 }
 
@@ -176,12 +191,7 @@ func TestFourCuts(t *testing.T) {
 		top.Of = append(top.Of, scene.Subject{Name: s.Name, Value: s})
 	}
 	b := &scene.Block{Form: "sheet", Name: "four", Title: "A cone and four planes", Size: "A1", Titles: &scene.Titles{}, Views: views}
-	sheet, problems := Compose(sc, b)
-	for _, p := range problems {
-		t.Log(p)
-	}
-	keep(t, sheet)
+	looked(t, sc, b)
 	b.Size, b.Name = "A3", "four3"
-	sheet, _ = Compose(sc, b)
-	keep(t, sheet)
+	looked(t, sc, b)
 }

@@ -219,9 +219,24 @@ func (j *job) reportFull(p furniture.Paper, sets [][]*picture) {
 	j.report(Problem{Span: j.block.Span, Code: SheetFull, Text: text, Reason: strings.Join(would, "; "), Fatal: true})
 }
 
+// tooLarge names the first view whose outline alone is larger than the space.
+func (j *job) tooLarge(set []*picture, scale float64, space drawing.Box) string {
+	for _, p := range set {
+		w, h := p.size.X*j.scaleOf(p, scale), p.size.Y*j.scaleOf(p, scale)
+		if over := max(w-space.Width(), h-space.Height()); over > 0 {
+			return fmt.Sprintf(": the outline of %s alone is %.0f by %.0f mm, %.0f mm more than the drawing space of %.0f by %.0f mm",
+				p.name, w, h, over, space.Width(), space.Height())
+		}
+	}
+	return ""
+}
+
 // excess tells by how much: of the views that stand in projection and are too
 // large together, or of the area of all.
 func (j *job) excess(p furniture.Paper, scale float64, set []*picture) string {
+	if !j.mayFit(set, scale, p.Space()) {
+		return j.tooLarge(set, scale, p.Space())
+	}
 	a := &attempt{scale: scale, drafts: j.drafts(set, scale), extras: j.extras(scale, noteWidths()[0])}
 	s, area := p.Space(), furniture.BlockWidth*furniture.BlockHeight
 	l := j.layoutOf(a, s, nil)
