@@ -175,15 +175,16 @@ func (r rounder) length(x float64) string {
 }
 
 // stationRows is the table of true lengths: every station in the order of the
-// girth, its running place along it from the seam, and what of it is inside.
-// Rounding is of running values, so that it does not add up.
+// girth, its running place on the pattern from the seam (an angle at a cone's
+// apex, a length along a cylinder's girth), and what of it is inside. Rounding is
+// of running values, so that it does not add up.
 func stationRows(d *scene.Development, r rounder) [][]string {
-	header := []string{"No.", "from seam", "along girth " + r.unit, "true length " + r.unit}
-	cone := !d.Of.Root.Cylinder
-	if cone {
-		header = append(header, "from apex "+r.unit, "to "+r.unit)
-	} else {
-		header = append(header, "from datum "+r.unit, "to "+r.unit)
+	header := []string{"No.", "from seam", "along girth " + r.unit, "true length " + r.unit, "from datum " + r.unit, "to " + r.unit}
+	place := func(turn float64) string { return r.length(turn * d.Of.Root.Radius) }
+	if !d.Of.Root.Cylinder {
+		header[2], header[4] = "on pattern", "from apex "+r.unit
+		sine := math.Abs(d.Of.Root.Radius-d.Of.Root.TopRadius) / math.Hypot(d.Of.Root.Radius-d.Of.Root.TopRadius, d.Of.Root.Height)
+		place = func(turn float64) string { return figureOf(turn*sine, patternAngle) }
 	}
 	rows := [][]string{header}
 	letter := 'a'
@@ -194,7 +195,7 @@ func stationRows(d *scene.Development, r rounder) [][]string {
 			letter++
 		}
 		turn := s.Theta - d.Seam
-		row := []string{no, usualFigure(quantity.FromRadians(turn)), r.length(turn * girthRadius(d)), r.length(s.Length())}
+		row := []string{no, figureOf(turn, usualAngle), place(turn), r.length(s.Length())}
 		if len(s.Spans) == 0 {
 			row = append(row, "–", "–")
 		} else {
@@ -205,8 +206,18 @@ func stationRows(d *scene.Development, r rounder) [][]string {
 	return rows
 }
 
-// girthRadius is the radius of the circle along which the girth runs.
-func girthRadius(d *scene.Development) float64 { return d.Of.Root.Radius }
+// patternAngle is the step of angles at a cone's apex: at a radius of 1 m a
+// hundredth of a degree is a sixth of a millimetre.
+var patternAngle = quantity.FromFloat(quantity.Angle, 0.01)
+
+// figureOf writes an angle given in radians to a step, with all its decimals.
+func figureOf(rad float64, step quantity.Value) string {
+	s, err := quantity.FormatNearest(quantity.FromRadians(rad), step, quantity.StyleOf(step))
+	if err != nil {
+		return quantity.Format(quantity.FromRadians(rad))
+	}
+	return s
+}
 
 // measureRows lists the measures of a thing.
 func (e *evaluator) measureRows(s scene.Subject, of *check.Bound, r rounder) [][]string {

@@ -39,7 +39,7 @@ func development(c *Call) (scene.Value, *Fail) {
 	}
 	p, err := flat.Of(of.Body, d.Face, flat.Options{Seam: d.Seam, Divisions: d.Divisions, Inside: d.InsideUp})
 	if err != nil {
-		return nil, fail("bad-geometry", "of", "%v", err)
+		return nil, fail("cannot-unroll", "of", "the curved face of %s cannot be unrolled", of.Name).because("%v", err)
 	}
 	d.Pattern = p
 	return d, nil

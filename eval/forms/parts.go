@@ -60,7 +60,7 @@ func cutOff(s *scene.Solid, p *scene.Plane, word string, keep vec.V3) *Fail {
 		return fail("plane-misses", word, "%s does not cut %s: all of it lies %s the plane", p.Name, s.Root.Name, plainly(word)).
 			because("the plane passes the solid by %s", showMM(miss.Miss))
 	case err != nil:
-		return fail("bad-geometry", word, "%v", err)
+		panic(err) // Cut fails in no other way
 	}
 	s.Body, s.Cuts = b, append(s.Cuts, p)
 	return nil

@@ -28,7 +28,7 @@ func cutBy(c *Call, clause string) (*scene.Section, *Fail) {
 		return nil, fail("plane-misses", clause, "%s does not meet %s", p.Name, of.Name).
 			because("the plane passes the solid by %s", showMM(miss.Miss))
 	case err != nil:
-		return nil, fail("bad-geometry", clause, "%v", err)
+		panic(err) // Of fails in no other way
 	}
 	return &scene.Section{Name: c.Name, Section: s, Of: of, By: p}, nil
 }

@@ -53,6 +53,7 @@ type CutError struct {
 	Miss    float64 // distance from the plane to the body, mm, >= 0
 }
 
+// Error says what is wrong and by how much.
 func (e *CutError) Error() string {
 	what := "the plane takes nothing away"
 	if e.Nothing {
@@ -149,6 +150,10 @@ func (b *Body) Size() float64 { return b.size }
 
 // Middle is the point that lengths within the body are worked out from.
 func (b *Body) Middle() vec.V3 { return b.middle }
+
+// Convex tells whether the body is known to be convex: an intersection of half-spaces,
+// cones and cylinders, all of which are convex.
+func (b *Body) Convex() bool { return b.tree.convex() }
 
 // FaceIndex is the index of the face with the label, or -1. A plane that
 // coincided with a face when it cut finds that face.

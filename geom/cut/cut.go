@@ -73,6 +73,7 @@ type Section struct {
 // MissError says that the plane passes the body by Miss mm.
 type MissError struct{ Miss float64 }
 
+// Error says by how much the plane passes the body.
 func (e *MissError) Error() string {
 	return fmt.Sprintf("the plane misses the solid by %.6g mm", e.Miss)
 }

@@ -37,7 +37,7 @@ var lineForms = []Form{
 			{Name: "horizontal_trace", Kind: KPoint, Help: "Where it meets the ground."},
 			{Name: "vertical_trace", Kind: KPoint, Help: "Where it meets the frontal plane."},
 		},
-		Example: "L = line through (10 mm, 20 mm, 30 mm), (110 mm, 80 mm, 90 mm)\n", Subject: "L",
+		Example: "L = line through (10 mm, 20 mm, 30 mm), (110 mm, 80 mm, 90 mm)\nM = line through (0, 0, 0) along (1, 2, 2)\n", Subject: "L",
 	},
 	{
 		Word: "plane", Chapter: chLines, Kind: KPlane,
@@ -246,7 +246,7 @@ var curveForms = []Form{
 			{Name: "sector", Kind: KAngle, Help: "The angle of a cone's pattern at the apex.", Example: "E.sector"},
 			{Name: "outer_radius", Kind: KLength, Help: "The greatest distance from a cone's apex.", Example: "E.outer_radius"},
 			{Name: "inner_radius", Kind: KLength, Help: "The least distance from a cone's apex.", Example: "E.inner_radius"},
-			{Name: "girth", Kind: KLength, Help: "The length of the base circle, laid out as an arc or as a straight line."},
+			{Name: "girth", Kind: KLength, Help: "The length round a cylinder; on a cone the arc at the outer radius."},
 			{Name: "stepped_girth", Kind: KLength, Help: "The same when the divisions are stepped off as chords."},
 			{Name: "step_loss", Kind: KLength, Help: "By how much stepping off chords falls short."},
 			{Name: "deviation", Kind: KLength, Help: "The largest miss of its points, folded back, from the solid."},

@@ -42,6 +42,7 @@ func evalCodes() []Entry {
 	c := func(code Code, meaning, example string) Entry { return Entry{code, StageEval, meaning, example} }
 	return []Entry{
 		c("bad-arithmetic", "A calculation has no result, as a division by zero.", "a = 3 mm/(2 - 2)\n"),
+		c("cannot-unroll", "A curved face cannot be laid flat, as one of which nothing is left.", "C = cylinder radius 50 mm height 20 mm\nP = plane through (20 mm, 0, 0) normal rightward\nQ = plane through (-20 mm, 0, 0) normal rightward\nR = plane through (0, 20 mm, 0) normal rearward\nT = plane through (0, -20 mm, 0) normal rearward\nB = part of C left_of P right_of Q in_front_of R behind T\nD = development of B\n"),
 		c("directions-parallel", "Two directions that should fix a plane are parallel.", "P = plane through (0, 0, 0) along rightward, leftward\n"),
 		c("needs-number", "A section has two of what was asked for, so a number is needed.", cone+"P = plane through (0, 0, 120 mm) tilt 30° facing 0°\nS = section of K by P\na = S.focus\n"),
 		c("no-dimension", "A measure has no place on a view where a dimension could stand.", cone+"P = plane through (0, 0, 120 mm) tilt 30° facing 0°\nS = section of K by P\ns = sheet \"S\" {\n    front = elevation of K\n    dimension of S.perimeter on front\n}\n"),
