@@ -68,3 +68,16 @@ func (t tree) value(of func(face int) float64) float64 {
 	}
 	return v
 }
+
+// convex tells whether the tree is an intersection.
+func (t tree) convex() bool {
+	if t.op != leaf && t.op != and {
+		return false
+	}
+	for _, k := range t.kids {
+		if !k.convex() {
+			return false
+		}
+	}
+	return true
+}

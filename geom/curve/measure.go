@@ -28,17 +28,47 @@ func (f Form) length(uu, uw, ww, lo, hi float64) float64 {
 	case Parabola:
 		return parabolaLength(uu, uw, ww, lo, hi)
 	}
+	return f.pathLength(uu, uw, ww, lo, hi)
+}
+
+// pathLength is length by quadrature, split where the curve is slowest or fastest: an
+// integrand with a narrow dip must have it at the end of a panel, not hidden beside one.
+func (f Form) pathLength(uu, uw, ww, lo, hi float64) float64 {
 	speed := func(t float64) float64 {
 		u, w := f.weights(t, 1)
 		return math.Sqrt(max(0, float64(u*u*uu)+float64(2*u*w*uw)+float64(w*w*ww)))
 	}
-	cs := f.chunks(lo, hi)
-	h := (hi - lo) / float64(2*len(cs))
+	cuts := []float64{lo}
+	for _, t := range f.turningSpeed(uu, uw, ww, lo, hi) {
+		if t > cuts[len(cuts)-1] && t < hi {
+			cuts = append(cuts, t)
+		}
+	}
+	cuts = append(cuts, hi)
 	sum := 0.0
-	for _, c := range cs {
-		sum += num.Integrate(speed, c.m-h, c.m+h)
+	for i := 1; i < len(cuts); i++ {
+		sum += num.Integrate(speed, cuts[i-1], cuts[i])
 	}
 	return sum
+}
+
+// turningSpeed is the parameters, ascending, at which the speed has an extreme; for a parabola, which comes
+// here only far from its vertex, none.
+func (f Form) turningSpeed(uu, uw, ww, lo, hi float64) []float64 {
+	switch f {
+	case Hyperbola, HyperbolaEnd:
+		if uu+ww > 2*math.Abs(uw) {
+			return []float64{math.Atanh(-2*uw/(uu+ww)) / 2}
+		}
+	case EllipseEnd:
+		t := math.Atan2(-2*uw, uu-ww) / 2
+		var out []float64
+		for t -= math.Pi / 2 * math.Floor((t-lo)/(math.Pi/2)); t < hi; t += math.Pi / 2 {
+			out = append(out, t)
+		}
+		return out
+	}
+	return nil
 }
 
 // ellipseLength turns the conjugate pair to the axes; from the end of the short
@@ -56,13 +86,17 @@ func ellipseLength(uu, uw, ww, lo, hi float64) float64 {
 	return math.Sqrt(long) * (at(hi) - at(lo))
 }
 
-// parabolaLength is the closed form about the vertex.
+// parabolaLength is the closed form about the vertex; for an arc so far from the vertex that
+// the difference of two such lengths would lose digits, quadrature, which has an easy time there.
 func parabolaLength(uu, uw, ww, lo, hi float64) float64 {
 	if ww == 0 {
 		return math.Sqrt(uu) * (hi - lo)
 	}
 	shift := -uw / (2 * ww)
-	a := max(0, uu-uw*uw/ww) // squared speed at the vertex
+	if min(math.Abs(lo-shift), math.Abs(hi-shift)) > hi-lo && (lo-shift)*(hi-shift) > 0 {
+		return Parabola.pathLength(uu, uw, ww, lo, hi)
+	}
+	a := max(0, num.Det(uu, uw, uw, ww)/ww) // squared speed at the vertex
 	w := math.Sqrt(ww)
 	at := func(t float64) float64 {
 		t -= shift

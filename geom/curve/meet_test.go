@@ -101,6 +101,9 @@ func TestMeetFindsThePoint(t *testing.T) {
 				t.Skip("so thin that the tolerance may make one contact of its two sides")
 			}
 		}
+		if da, db := a.Deriv(ta, 1).Unit(), b.Deriv(tb, 1).Unit(); math.Abs(da.Cross(db)) < 1e-6 {
+			t.Skip("so nearly a contact that it may count as one, elsewhere")
+		}
 		pts, same := Meet(a, b, tol)
 		found := same
 		for _, p := range pts {

@@ -88,7 +88,7 @@ func firstE(phi, m, mc float64) float64 {
 		return 0
 	}
 	d2 := float64(c*c) + float64(mc*s*s) // 1 - m·sin²
-	if mc == 0 {
+	if mc < 0x1p-60 {                    // E exceeds s by less than mc·ln(4/√mc)/2, under Eps/8
 		return s
 	}
 	rf := s * carlsonF(c*c, d2, 1)

@@ -23,21 +23,6 @@ type cand struct {
 	stops  []stop
 }
 
-// stop is a space parameter at which a candidate is split.
-type stop struct {
-	t    float64
-	rank uint8
-	with *cand // the candidate whose image crosses or touches there, or nil
-}
-
-// The ranks of stops: where several fall together the most exact one stands for all.
-const (
-	atEnd      uint8 = iota // an end of the curve
-	atTurn                  // where it crosses the plane of contact, or a surface
-	atCrossing              // where its image crosses another's
-	atShared                // taken over from a curve with the same image
-)
-
 // candidates are those of every body, edges before contours, in that order.
 func (s *scene) candidates() []cand {
 	var out []cand
@@ -96,15 +81,6 @@ func (s *scene) meetBodies(c *cand) {
 		}
 		for _, face := range s.bodies[k].Faces {
 			c.stopAt(atTurn, nil, surface.Cross(face.Surface, c.inSpace(), c.err)...)
-		}
-	}
-}
-
-// stopAt adds stops at those of the space parameters ts that lie within c.
-func (c *cand) stopAt(rank uint8, with *cand, ts ...float64) {
-	for _, t := range ts {
-		if t > c.t0 && t < c.t1 {
-			c.stops = append(c.stops, stop{t, rank, with})
 		}
 	}
 }

@@ -22,10 +22,10 @@ const seed = 20261
 // dip: a point whose ray dips this deep or less into a solid may be told
 // either way; the package takes num.OnSurface = 1.5e-11 of its size in the middle of
 // an interval, which is at most twice as deep somewhere else.
-// near: a drawn piece may end this far from where it should, since images that touch cross there (see sliver).
+// near: a drawn piece may end this far from where it should, since images that touch cross there (see blur).
 const (
 	dip  = 4e-11
-	near = 4e-6
+	near = 1e-5
 	// graze: a hidden point is covered at least so deep, relative to the smallest solid; a ray that
 	// only grazes a surface is about a hundredth of it deep.
 	graze = 1e-12

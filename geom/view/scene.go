@@ -5,6 +5,7 @@ import (
 
 	"epure/geom/body"
 	"epure/geom/curve"
+	"epure/geom/num"
 	"epure/geom/surface"
 	"epure/geom/vec"
 )
@@ -25,6 +26,7 @@ type scene struct {
 	where   *tree             // of their images
 	reach   float64           // largest length that goes into a coordinate, mm
 	err     float64           // Grain·reach, mm
+	gap     float64           // the largest bound for a point on a body's surface, mm
 	contact [][]surface.Plane // planes of contact of their curved faces
 }
 
@@ -35,6 +37,7 @@ func newScene(bodies []*body.Body, f vec.Frame) *scene {
 		lo, hi := b.Bounds(f)
 		s.lo, s.hi = append(s.lo, lo), append(s.hi, hi)
 		s.reach = max(s.reach, lo.Len(), hi.Len())
+		s.gap = max(s.gap, num.OnSurface*b.Size())
 		boxes[i] = box{vec.V2{X: lo.X, Y: lo.Y}, vec.V2{X: hi.X, Y: hi.Y}}
 		s.contact = append(s.contact, contactPlanes(b, f.Z))
 	}

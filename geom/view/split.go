@@ -1,7 +1,6 @@
 package view
 
 import (
-	"math"
 	"slices"
 
 	"epure/geom/curve"
@@ -80,21 +79,12 @@ func (d *drawing) crossTwo(i, j int) {
 		// Only what lies before a curve can hide it. Where both lie at one depth, within the
 		// blur of a crossing, either may.
 		ahead := b.arc.At(t).Sub(a.arc.At(s)).Dot(d.f.Z)
-		slack := a.blur(d.sizeOf(a)).closest + b.blur(d.sizeOf(b)).closest
+		slack := a.blur(d.sizeOf(a), d.gap).closest + b.blur(d.sizeOf(b), d.gap).closest
 		if ahead > -slack {
 			a.stopAt(atCrossing, b, s)
 		}
 		if ahead < slack {
 			b.stopAt(atCrossing, a, t)
-		}
-	}
-}
-
-// stopEnds stops a at the ends of b, whose image lies on the same curve.
-func (a *cand) stopEnds(b *cand) {
-	for _, t := range [2]float64{b.t0, b.t1} {
-		if t, ok := a.locate(b, t); ok {
-			a.stopAt(atCrossing, nil, t)
 		}
 	}
 }
@@ -122,20 +112,6 @@ func (d *drawing) give(i, j, n int) {
 	}
 }
 
-// blur is how far, in space, a crossing of images may lie from where it should.
-// Images that touch, each wrong by err, cross as far as √(2·err·R) from the point of contact, R
-// being the radius of curvature, of the order of the size of the body or of
-// the curve, whichever is larger. Two conics may touch as closely as the fourth order (all
-// curves of a cone do where a generator is seen end-on); then it is the fourth root of err·R³.
-type blur struct{ contact, closest float64 }
-
-func (c *cand) blur(size float64) blur {
-	u, w := weightBounds(c.arc.Form, c.t0, c.t1)
-	r := max(size, float64(u*c.arc.U.Len())+float64(w*c.arc.W.Len()))
-	second := math.Sqrt(c.err * r)
-	return blur{2 * second, 2 * math.Sqrt(second*r)}
-}
-
 // sizeOf is the size of the candidate's body, mm; zero for a wire.
 func (d *drawing) sizeOf(c *cand) float64 {
 	if c.body == Wire {
@@ -149,66 +125,12 @@ func (d *drawing) cut() {
 	for i := range d.cands[:d.active] {
 		c := &d.cands[i]
 		d.first = append(d.first, len(d.pieces))
-		ts := c.clean(d.sizeOf(c))
+		ts := c.clean(c.blur(d.sizeOf(c), d.gap))
 		for k := 1; k < len(ts); k++ {
 			d.pieces = append(d.pieces, piece{cand: i, t0: ts[k-1], t1: ts[k], group: len(d.pieces)})
 		}
 	}
 	d.first = append(d.first, len(d.pieces))
-}
-
-// clean returns the parameters of the stops in order. Of those that are one
-// place within the blur only the most exact is kept; the ends always stay.
-func (c *cand) clean(size float64) []float64 {
-	slices.SortStableFunc(c.stops, func(a, b stop) int {
-		switch {
-		case a.t < b.t:
-			return -1
-		case a.t > b.t:
-			return 1
-		}
-		return int(a.rank) - int(b.rank)
-	})
-	blur := c.blur(size)
-	from, kept := c.stops[0], c.stops[:1] // from is where the cluster begins
-	for _, s := range c.stops[1:] {
-		last := &kept[len(kept)-1]
-		switch {
-		case !c.together(from, s, blur) || s.t == c.t1 && last.t == c.t0:
-			from, kept = s, append(kept, s)
-		case s.rank < last.rank:
-			*last = s
-		}
-	}
-	ts := make([]float64, len(kept))
-	for k, s := range kept {
-		ts[k] = s.t
-	}
-	return ts
-}
-
-// together tells whether two stops are one place: nearer than the blur of a contact, or within that of
-// the closest contact while c runs along a curve that it meets there.
-func (c *cand) together(a, b stop, blur blur) bool {
-	d := c.arc.At(a.t).Dist(c.arc.At(b.t))
-	if d <= blur.contact {
-		return true
-	}
-	return d <= blur.closest && (c.runsAlong(a.with, a.t, b.t) || c.runsAlong(b.with, a.t, b.t))
-}
-
-// runsAlong tells whether the image of c lies on that of o from t0 to t1.
-func (c *cand) runsAlong(o *cand, t0, t1 float64) bool {
-	if o == nil {
-		return false
-	}
-	w := unbounded(o.image)
-	for k := range probes + 1 {
-		if _, ok := w.Param(c.point(t0+(t1-t0)*float64(k)/probes), 2*(c.err+o.err)); !ok {
-			return false
-		}
-	}
-	return true
 }
 
 // decide sends a ray from the middle of every piece.
@@ -245,14 +167,4 @@ func lies(a, b *cand) bool {
 		}
 	}
 	return true
-}
-
-// unbounded is the whole of the arc's curve.
-func unbounded(a curve.Arc2) curve.Arc2 {
-	if a.Form.Periodic() {
-		a.T1 = a.T0 + 2*math.Pi
-	} else {
-		a.T0, a.T1 = math.Inf(-1), math.Inf(1)
-	}
-	return a
 }

@@ -122,7 +122,7 @@ func (c *cand) tiny(s span) bool {
 
 // whole tells whether c is a whole ellipse.
 func (c *cand) whole() bool {
-	return c.image.Form.Periodic() && c.t1-c.t0 > math.Pi && c.arc.Start().Dist(c.arc.End()) <= c.err
+	return c.image.Form.Periodic() && c.t1-c.t0 > math.Pi && c.arc.At(c.t0).Dist(c.arc.At(c.t1)) <= c.err
 }
 
 // cutTo is the candidate of the stretch s of c.

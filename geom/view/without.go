@@ -58,7 +58,7 @@ func (p Piece) outside(out []Piece, c *cand, others []*cand) []Piece {
 	for _, o := range others {
 		c.stopEnds(o)
 	}
-	ts := c.clean(0)
+	ts := c.clean(c.blur(0, 0))
 	from := len(out)
 	for k := 1; k < len(ts); k++ {
 		if c.onAny(others, (ts[k-1]+ts[k])/2) {
