@@ -67,7 +67,11 @@ func (m *markdown) basics() {
 			"It takes one line and goes on over the next one if that is indented deeper or a round bracket is open. `#` begins a comment.",
 		"A quantity is a number with its unit: `60 mm`, `1 3/8 in`, `5 ft 3 1/2 in`, `35.5°`, `35°30′15″`, `20 %`, `1:2` (rise to run, or a scale). "+
 			"Lengths, areas, volumes, angles, ratios and plain numbers are different kinds and are not mixed; `0` needs no unit. "+
-			"Points are `(x, y, z)`, on paper and on patterns `(x, y)`: x to the right, y back, z up.",
+			"Units are `mm cm m in ft` (and `mm² mm³` and so on), `° deg rad` and `%`; fractions go with `in` and `ft` only, and decimals have a point.",
+		"`+ - * / ^` work as usual, with brackets; the minus is greedy, so `radius r -3 mm` is `r - 3 mm`. Sums need one kind. A product or quotient has the kind that follows: length times length is an area, length over length a number. "+
+			"A ratio multiplies like a number; it is compared with numbers but not added to them. `50 mm^2` is `(50 mm)^2`; an area is `50 mm²`.",
+		"Points are `(x, y, z)` with lengths, directions with plain numbers; on paper and on patterns `(x, y)`. x runs to the right, y back, z up. An angle about a vertical axis starts rightward, anticlockwise seen from above; about any other axis it starts at its top line, anticlockwise looking against the axis. "+
+			"In a plane x is level, to the right for someone who looks against the normal, and y climbs.",
 		"Every named thing has measures, `K.slant`, that other statements use. In a text, `{K.slant nearest 0.1 mm}` is replaced by the value; the step fixes unit, decimals and fractions.")
 }
 
