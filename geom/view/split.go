@@ -139,7 +139,10 @@ func (d *drawing) decide() {
 		p := &d.pieces[k]
 		c := &d.cands[p.cand]
 		m := c.arc.At((p.t0 + p.t1) / 2)
-		p.layers = d.scene.layers(m, c.err)
+		p.layers = d.layers(m, c.err)
+		if c.hidden { // its middle may be a point where it touches the border of the shadow
+			p.layers = max(p.layers, 1)
+		}
 		p.near = d.f.Local(m).Z
 	}
 }
