@@ -233,7 +233,8 @@ func (c *checker) unique(s *Symbol, names map[string]*Symbol) bool {
 		return false // reported already
 	}
 	if ok {
-		c.bag.Add(c.report("name-taken", s.NameSpan, "%s is defined already", source.Quote(s.Name)).WithNote(first.NameSpan, "the first one is here"))
+		c.bag.Add(c.report("name-taken", s.NameSpan, "%s is defined already", source.Quote(s.Name)).
+			Because("a name means one thing in the whole file, inside blocks too").WithNote(first.NameSpan, "the first one is here"))
 	}
 	return !ok
 }

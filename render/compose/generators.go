@@ -210,12 +210,14 @@ next:
 	}
 }
 
-// ends are the ends of a generator, the one at the base last: the one farther
+// ends are the ends of a generator, the one with room for a number last: the one farther
 // from the apex of a cone, the one nearer the base of a cylinder.
 func (g generator) ends(s *scene.Solid) (near, far vec.V3) {
 	near, far = g.arc.Start(), g.arc.End()
-	base := s.Root.Base
-	if math.Abs(base.Local(near).Z) < math.Abs(base.Local(far).Z) {
+	if !s.Root.Cylinder {
+		return near, far // a cone's generators run from its apex
+	}
+	if math.Abs(s.Root.Base.Local(near).Z) < math.Abs(s.Root.Base.Local(far).Z) {
 		return far, near
 	}
 	return near, far
