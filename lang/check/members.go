@@ -51,12 +51,7 @@ func (c *checker) argument(of string, e syntax.Expr, k catalogue.Kind, takes []c
 	}
 	d := c.report("wrong-kind", e.Span(), "`%s` takes %s here", of, names(takes, nil)).
 		Because(source.Quote(e.Span().Text()) + " is " + name(k))
-	if k.Class == catalogue.Quantity && k.Of == quantity.Number {
-		for _, u := range missingUnits(takes) {
-			d = d.WithLabelledFix(after(e.Span()), u, "write the unit, as "+e.Span().Text()+u)
-		}
-	}
-	c.blame(d)
+	c.blame(c.unitHint(d, e, k, takes))
 }
 
 // arguments lists what a measure needs: "an angle", "a plane, a solid or a face, and …".

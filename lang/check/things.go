@@ -5,6 +5,7 @@ import (
 	"slices"
 
 	"epure/lang/catalogue"
+	"epure/lang/diag"
 	"epure/lang/quantity"
 	"epure/lang/source"
 	"epure/lang/spell"
@@ -155,12 +156,27 @@ func (c *checker) unknownWord(spec *catalogue.Clause, n *syntax.Name) {
 func (c *checker) wrongKind(spec *catalogue.Clause, e syntax.Expr, k catalogue.Kind) {
 	d := c.report("wrong-kind", e.Span(), "`%s` takes %s", spec.Word, names(spec.Takes, spec.Words)).
 		Because(source.Quote(e.Span().Text()) + " is " + name(k))
-	if k.Class == catalogue.Quantity && k.Of == quantity.Number {
-		for _, u := range missingUnits(spec.Takes) {
+	c.blame(c.unitHint(d, e, k, spec.Takes))
+}
+
+// unitHint adds the way out when a plain number stands for a length or an angle:
+// the unit at a written number, the definition of a name.
+func (c *checker) unitHint(d diag.Diagnostic, e syntax.Expr, k catalogue.Kind, takes []catalogue.Kind) diag.Diagnostic {
+	units := missingUnits(takes)
+	if k.Class != catalogue.Quantity || k.Of != quantity.Number || len(units) == 0 {
+		return d
+	}
+	switch e := e.(type) {
+	case *syntax.Quantity:
+		for _, u := range units {
 			d = d.WithLabelledFix(after(e.Span()), u, "write the unit, as "+e.Span().Text()+u)
 		}
+	case *syntax.Name:
+		if s := c.model.refs[e]; s != nil && s.Expr != nil {
+			d = d.WithNote(s.Expr.Span(), "it is defined here, without a unit")
+		}
 	}
-	c.blame(d)
+	return d
 }
 
 // missingUnits are the units that a plain number may lack.
