@@ -18,6 +18,7 @@ import (
 	"epure/render/compose"
 	"epure/render/drawing"
 	"epure/render/pdf"
+	"epure/render/png"
 	"epure/render/svg"
 )
 
@@ -137,8 +138,14 @@ func writers() []writer {
 	return []writer{
 		{"svg", "image/svg+xml", func(s drawing.Sheet) ([]byte, error) { return svg.Write(s, svg.Options{}) }},
 		{"pdf", "application/pdf", pdf.Write},
+		{"png", "image/png", func(s drawing.Sheet) ([]byte, error) { return png.Write(s, dotsPerInch) }},
 	}
 }
+
+// dotsPerInch is the resolution of images: at 200, the narrowest line of a drawing
+// (0.18 mm, ISO 128-2) is a dot and a half wide and its lettering (1.8 mm capitals)
+// fourteen dots high, which a screen shows and a printer for notes can print.
+const dotsPerInch = 200
 
 // Formats returns the output formats, in the order in which they are written.
 func Formats() []string {
