@@ -5,6 +5,7 @@ import (
 	"context"
 	"os"
 	"os/signal"
+	"runtime/debug"
 	"syscall"
 	"time"
 
@@ -14,7 +15,14 @@ import (
 	"epure/cmd/internal/host"
 )
 
-func main() { os.Exit(cli.Run(world())) }
+func main() {
+	// A run is short and small: collecting at a quarter of the usual rate saves a
+	// tenth of it. The environment's GOGC still decides when it is set.
+	if os.Getenv("GOGC") == "" {
+		debug.SetGCPercent(400)
+	}
+	os.Exit(cli.Run(world()))
+}
 
 // world is the real one.
 func world() *host.Host {

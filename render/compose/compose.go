@@ -48,6 +48,7 @@ type job struct {
 	block    *scene.Block
 	ink      ink
 	problems []Problem
+	drafted  []extra // the tables, see tables
 }
 
 // Compose lays out the block b of the scene s. The sheet is nil when one of the

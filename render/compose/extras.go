@@ -1,6 +1,7 @@
 package compose
 
 import (
+	"slices"
 	"strings"
 
 	"epure/eval/scene"
@@ -25,14 +26,7 @@ func noteWidths() []float64 { return []float64{180, 120, 80} }
 
 // extras drafts tables and notes; notes are broken to a width.
 func (j *job) extras(scale, width float64) []extra {
-	var out []extra
-	for _, t := range j.block.Tables {
-		if len(t.Rows) > 0 {
-			e := j.table(t)
-			e.at = t.At
-			out = append(out, e)
-		}
-	}
+	out := slices.Clone(j.tables())
 	var free []string
 	for _, n := range j.block.Notes {
 		if n.At == nil {
@@ -51,6 +45,21 @@ func (j *job) extras(scale, width float64) []extra {
 		out = append(out, j.notes("notes", free, cautions, width))
 	}
 	return out
+}
+
+// tables drafts the tables, once: they are the same at every scale.
+func (j *job) tables() []extra {
+	if j.drafted == nil {
+		j.drafted = []extra{}
+		for _, t := range j.block.Tables {
+			if len(t.Rows) > 0 {
+				e := j.table(t)
+				e.at = t.At
+				j.drafted = append(j.drafted, e)
+			}
+		}
+	}
+	return j.drafted
 }
 
 // notes drafts lines of text from the top down: notes, then cautions in small
