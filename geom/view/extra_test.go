@@ -193,6 +193,14 @@ func TestSeen(t *testing.T) {
 			t.Errorf("the cylinder's side at %g from above: seen %v", z, got)
 		}
 	}
+	for _, c := range []struct {
+		p    vec.V3
+		want int
+	}{{vec.V3{Y: -170, Z: 50}, 0}, {vec.V3{Y: -100, Z: 50}, 1}, {vec.V3{Y: 30, Z: 50}, 1}, {vec.V3{Y: 300, Z: 50}, 2}, {vec.V3{X: 60, Y: 300, Z: 50}, 0}} {
+		if got := Layers(bodies, front, c.p); got != c.want {
+			t.Errorf("%v: %d layers, want %d", c.p, got, c.want)
+		}
+	}
 	down := vec.V3{X: 50, Z: -120}.Unit()
 	if !Seen(bodies, vec.ViewFrame(down), vec.V3{X: 50, Y: -100}) {
 		t.Error("the foot of a generator seen end-on is hidden")

@@ -73,8 +73,8 @@ func (d *drawing) unite(k, l int) {
 // lie on one curve of space and any of them will do; the order of comparison is fixed.
 func (d *drawing) before(k, l int) bool {
 	p, q := &d.pieces[k], &d.pieces[l]
-	if v, w := p.layers == 0, q.layers == 0; v != w {
-		return v
+	if p.visible != q.visible {
+		return p.visible
 	}
 	e := d.cands[p.cand].err + d.cands[q.cand].err
 	if math.Abs(p.near-q.near) > 2*e {
@@ -94,11 +94,10 @@ func (d *drawing) join() []Piece {
 			if p.dropped {
 				continue
 			}
-			q := Piece{Body: c.body, A: c.a, B: c.b, Visible: p.layers == 0, Layers: p.layers}
+			q := Piece{Body: c.body, A: c.a, B: c.b, Visible: p.visible}
 			q.Space = curve.Arc{Curve: c.arc.Curve, T0: p.t0, T1: p.t1}
 			if n := len(out); n > from && out[n-1].Space.T1 == p.t0 && out[n-1].Visible == q.Visible {
 				out[n-1].Space.T1 = p.t1
-				out[n-1].Layers = min(out[n-1].Layers, p.layers)
 				continue
 			}
 			out = append(out, q)
@@ -124,7 +123,6 @@ func closeRing(out []Piece, from int, c *cand) []Piece {
 	if p.Space.T0 != c.t0 || q.Space.T1 != c.t1 || p.Visible != q.Visible {
 		return out
 	}
-	p.Layers = min(p.Layers, q.Layers)
 	p.Space.T0, p.Space.T1 = q.Space.T0, p.Space.T1+2*math.Pi
 	return out[:last]
 }

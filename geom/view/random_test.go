@@ -113,9 +113,6 @@ func (s randomScene) checkPieces(t *testing.T, r *rand.Rand, pieces []Piece) (n 
 				t.Fatalf("%s: image off by %g", where, d)
 			}
 			v := s.deepest(q)
-			if p.Visible != (p.Layers == 0) {
-				t.Fatalf("%s: layers %d", where, p.Layers)
-			}
 			if p.Visible && v < -dip*s.size || !p.Visible && v > -graze*s.smallest() {
 				t.Fatalf("%s: depth %g", where, v)
 			}

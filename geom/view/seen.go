@@ -16,7 +16,7 @@ import (
 func Seen(bodies []*body.Body, f vec.Frame, p vec.V3) bool {
 	s := newScene(bodies, f)
 	s.grow(p)
-	if s.layers(p, s.err) > 0 {
+	if s.covered(p, s.err) {
 		return false
 	}
 	for _, k := range s.before(p, s.err) {
@@ -25,6 +25,18 @@ func Seen(bodies []*body.Body, f vec.Frame, p vec.V3) bool {
 		}
 	}
 	return true
+}
+
+// Layers counts the layers of material between the point p of space and the viewer. A
+// body that p's ray leaves and enters again counts twice; one that it only grazes does not count.
+func Layers(bodies []*body.Body, f vec.Frame, p vec.V3) int {
+	s := newScene(bodies, f)
+	s.grow(p)
+	n := 0
+	for _, k := range s.before(p, s.err) {
+		n += s.coverOf(k, p, s.err)
+	}
+	return n
 }
 
 // behindEdgeOn tells whether the ray from p to the viewer runs for a length

@@ -30,13 +30,9 @@ func (s *scene) coverOf(k int, p vec.V3, e float64) int {
 	return n
 }
 
-// layers counts the layers of material between p and the viewer, e being the error of p, mm.
-func (s *scene) layers(p vec.V3, e float64) int {
-	n := 0
-	for _, k := range s.before(p, e) {
-		n += s.coverOf(k, p, e)
-	}
-	return n
+// covered tells whether material lies between p and the viewer, e being the error of p, mm.
+func (s *scene) covered(p vec.V3, e float64) bool {
+	return slices.ContainsFunc(s.before(p, e), func(k int) bool { return s.coverOf(k, p, e) > 0 })
 }
 
 // before are the bodies that the ray from p to the viewer may meet.
@@ -53,7 +49,7 @@ func (s *scene) before(p vec.V3, e float64) []int {
 func (s *scene) inShadow(a curve.Arc, e float64) bool {
 	round, middles := corners(a)
 	for _, k := range s.before(middles[0], e) {
-		if convex(s.bodies[k]) &&
+		if s.bodies[k].Convex() &&
 			!slices.ContainsFunc(middles, func(p vec.V3) bool { return s.coverOf(k, p, e) == 0 }) &&
 			!slices.ContainsFunc(round, func(p vec.V3) bool { return !s.reaches(s.bodies[k], p, e) }) {
 			return true
@@ -79,10 +75,6 @@ func (s *scene) reaches(b *body.Body, p vec.V3, e float64) bool {
 	}
 	return false
 }
-
-// convex tells whether the body is convex: so far every body is an
-// intersection of half-spaces, cylinders and nappes of cones, which all are.
-func convex(*body.Body) bool { return true }
 
 // corners are points whose convex hull holds the arc: its ends, and for a conic the meets of the tangents
 // at the ends of stretches of a quarter turn at most; with the middles of the stretches.

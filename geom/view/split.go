@@ -10,7 +10,7 @@ import (
 type piece struct {
 	cand    int
 	t0, t1  float64 // space parameters
-	layers  int
+	visible bool
 	near    float64 // depth of its middle
 	group   int     // pieces of one group share an image; the lowest index of them
 	dropped bool
@@ -139,10 +139,8 @@ func (d *drawing) decide() {
 		p := &d.pieces[k]
 		c := &d.cands[p.cand]
 		m := c.arc.At((p.t0 + p.t1) / 2)
-		p.layers = d.layers(m, c.err)
-		if c.hidden { // its middle may be a point where it touches the border of the shadow
-			p.layers = max(p.layers, 1)
-		}
+		// A curve in one shadow needs no ray, and its middle may be where it touches the border.
+		p.visible = !c.hidden && !d.covered(m, c.err)
 		p.near = d.f.Local(m).Z
 	}
 }

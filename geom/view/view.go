@@ -40,7 +40,6 @@ type Piece struct {
 	// Visible tells that nothing lies before the piece. A piece that lies in a
 	// surface seen edge-on counts as visible when nothing else covers it.
 	Visible bool
-	Layers  int // how many layers of material cover the middle of it, or of a part of it; 0 when visible
 
 	flat curve.Curve2 // a straight image's curve with the parameter of Space; Form 0 otherwise
 }
