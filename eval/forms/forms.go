@@ -56,7 +56,8 @@ type Constructor func(c *Call) (scene.Value, *Fail)
 // since they only choose and place.
 func Constructors() map[string]Constructor {
 	return map[string]Constructor{
-		"line": line, "plane": plane, "cone": cone, "cylinder": cylinder, "part": part,
+		"line": line, "plane": plane, "rectangle": rectangle, "regular": regular, "outline": outline,
+		"cone": cone, "cylinder": cylinder, "prism": prism, "pyramid": pyramid, "part": part,
 		"section": section, "focal_sphere": focalSphere, "development": development, "titles": titles,
 	}
 }
@@ -83,6 +84,12 @@ func MeasureFuncs(typ string) map[string]MeasureFunc {
 		return coneMeasures()
 	case "cylinder":
 		return cylinderMeasures()
+	case "prism":
+		return prismMeasures()
+	case "pyramid":
+		return pyramidMeasures()
+	case "rectangle", "regular", "outline":
+		return outlineMeasures()
 	case "part":
 		return partMeasures()
 	case "circle":
@@ -109,13 +116,12 @@ func Type(v scene.Value) string {
 	case *scene.Plane:
 		return catalogue.KPlane.Type
 	case *scene.Solid:
-		switch {
-		case v.Whole != v:
+		if v.Whole != v {
 			return "part"
-		case v.Root.Cylinder:
-			return "cylinder"
 		}
-		return "cone"
+		return v.Root.Form
+	case *scene.Outline:
+		return catalogue.KOutline.Type
 	case *scene.Face:
 		if v.Circle != nil {
 			return catalogue.KCircle.Type

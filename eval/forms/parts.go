@@ -98,6 +98,9 @@ func partMeasures() map[string]MeasureFunc {
 // generatorMeasure is the generator at an angle: of a part, what is inside it.
 func generatorMeasure(v scene.Value, args []scene.Value) (Measured, *Fail) {
 	s := v.(*scene.Solid)
+	if s.Root.Outline != nil {
+		return Measured{}, fail("no-such-feature", "", "%s has no curved face and so no generators", s.Name)
+	}
 	name := fmt.Sprintf("%s.generator(%s)", s.Name, show(args[0]))
 	l := generatorOf(s, name, args[0])
 	if s.Whole != s {

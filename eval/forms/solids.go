@@ -2,6 +2,7 @@ package forms
 
 import (
 	"math"
+	"strings"
 
 	"epure/eval/scene"
 	"epure/geom/body"
@@ -43,7 +44,7 @@ func cone(c *Call) (scene.Value, *Fail) {
 	if f != nil {
 		return nil, f
 	}
-	return solid(&scene.Primitive{Name: c.Name, Base: base, Radius: r0, TopRadius: r1, Height: h}), nil
+	return solid(&scene.Primitive{Name: c.Name, Form: "cone", Base: base, Radius: r0, TopRadius: r1, Height: h}), nil
 }
 
 func cylinder(c *Call) (scene.Value, *Fail) {
@@ -68,7 +69,7 @@ func cylinder(c *Call) (scene.Value, *Fail) {
 		}
 		h = l.From.Dist(l.To)
 	}
-	return solid(&scene.Primitive{Name: c.Name, Cylinder: true, Base: base, Radius: r, TopRadius: r, Height: h}), nil
+	return solid(&scene.Primitive{Name: c.Name, Form: "cylinder", Cylinder: true, Base: base, Radius: r, TopRadius: r, Height: h}), nil
 }
 
 func (c *Call) axisLine() (*scene.Line, bool) {
@@ -163,6 +164,20 @@ func faceArea(s *scene.Solid, label string) float64 {
 	return s.Body.FaceArea(i)
 }
 
+// lateralArea is the area of the curved face, or of the sides of a prism or pyramid.
+func lateralArea(s *scene.Solid) float64 {
+	if s.Root.Outline == nil {
+		return faceArea(s, s.Root.SideFace)
+	}
+	sum := 0.0
+	for i, f := range s.Body.Faces {
+		if strings.HasPrefix(f.Label, s.Root.SideFace+"(") {
+			sum += s.Body.FaceArea(i)
+		}
+	}
+	return sum
+}
+
 // featureMeasures are the measures that every solid has.
 func featureMeasures() map[string]MeasureFunc {
 	plain := func(f func(s *scene.Solid) scene.Value) MeasureFunc {
@@ -170,7 +185,7 @@ func featureMeasures() map[string]MeasureFunc {
 	}
 	return map[string]MeasureFunc{
 		"volume":       plain(func(s *scene.Solid) scene.Value { return volume(s.Body.Volume()) }),
-		"lateral_area": plain(func(s *scene.Solid) scene.Value { return area(faceArea(s, s.Root.SideFace)) }),
+		"lateral_area": plain(func(s *scene.Solid) scene.Value { return area(lateralArea(s)) }),
 		"base_area":    plain(func(s *scene.Solid) scene.Value { return area(faceArea(s, s.Root.BaseFace)) }),
 		"top_area":     plain(func(s *scene.Solid) scene.Value { return area(faceArea(s, s.Root.TopFace)) }),
 		"area": plain(func(s *scene.Solid) scene.Value {
@@ -185,8 +200,11 @@ func featureMeasures() map[string]MeasureFunc {
 			l := segment(s.Name+".axis", s.Root.Base.O, s.Root.Base.O.Along(s.Root.Base.Z, s.Root.Height))
 			return Measured{l, axisAnchor(s)}, nil
 		}),
-		"side": plain(func(s *scene.Solid) scene.Value {
-			return &scene.Face{Name: s.Name + ".side", Solid: s, Label: s.Root.SideFace}
+		"side": solidFunc(func(s *scene.Solid) (Measured, *Fail) {
+			if s.Root.Outline != nil {
+				return Measured{}, fail("no-such-measure", "", "%s has no curved face", s.Name)
+			}
+			return Measured{Value: &scene.Face{Name: s.Name + ".side", Solid: s, Label: s.Root.SideFace}}, nil
 		}),
 		"generator": generatorMeasure,
 		"face":      faceMember,

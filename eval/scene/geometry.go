@@ -41,10 +41,14 @@ type Solid struct {
 	Whole *Solid   // the uncut solid; itself when it is uncut
 }
 
-// Primitive is a right cone, frustum or cylinder as it was declared.
+// Primitive is a solid as it was declared: a right cone, frustum or cylinder, or with Outline set a
+// prism or pyramid, of which only Base (at the centre of the base), Height, Apex and the labels hold; its sides are the faces
+// whose labels begin with SideFace+"(".
 type Primitive struct {
 	Name         string
+	Form         string // "cone", "cylinder", "prism", "pyramid"
 	Cylinder     bool
+	Outline      *Outline
 	Base         vec.Frame // origin at the base's centre, Z along the axis toward the apex or top
 	Angles       vec.Frame // angles about the axis: see vec.AxisFrame
 	Radius       float64   // of the base, mm
@@ -56,6 +60,25 @@ type Primitive struct {
 	TopFace      string
 	Apex         vec.V3  // cones and frusta
 	SlantOfWhole float64 // apex to base edge, mm; cones and frusta
+}
+
+// Outline is a polygon in a plane, its corners in the order of the source.
+type Outline struct {
+	Name    string
+	F       vec.Frame
+	Corners []vec.V2
+	Even    bool // a rectangle or a regular polygon: the line over its centre is drawn as a centre line
+}
+
+// Centreline is the direction (unit) of the centre line through Base.O; ok is false for a solid without one.
+func (p *Primitive) Centreline() (along vec.V3, ok bool) {
+	switch {
+	case p.Outline == nil:
+		return p.Base.Z, true
+	case p.Outline.Even:
+		return p.Apex.Sub(p.Base.O).Unit(), true
+	}
+	return along, false
 }
 
 // Face is a face of a solid, by its label.

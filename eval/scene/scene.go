@@ -88,6 +88,7 @@ func (*Line) value()        {}
 func (*Plane) value()       {}
 func (*Face) value()        {}
 func (*Edge) value()        {}
+func (*Outline) value()     {}
 func (*Solid) value()       {}
 func (*Section) value()     {}
 func (*Sphere) value()      {}

@@ -21,6 +21,7 @@ const (
 	Plane                    // a plane
 	Face                     // a face of a solid
 	Edge                     // an edge of a solid
+	Outline                  // a closed outline in a plane
 	Solid                    // a solid
 	Section                  // a plane section
 	Sphere                   // a sphere
@@ -57,6 +58,7 @@ var (
 	KFace      = Kind{Class: Face, Type: "face"}
 	KCircle    = Kind{Class: Face, Type: "circle"}
 	KEdge      = Kind{Class: Edge, Type: "edge"}
+	KOutline   = Kind{Class: Outline, Type: "outline"}
 	KSolid     = Kind{Class: Solid}
 	KSection   = Kind{Class: Section, Type: "section"}
 	KSphere    = Kind{Class: Sphere, Type: "focal_sphere"}

@@ -1,7 +1,7 @@
 package catalogue
 
 // Forms is every form, in the order of the manual.
-var Forms = concat(lineForms, solidForms, curveForms, blockForms, viewForms, markForms)
+var Forms = concat(lineForms, outlineForms, solidForms, flatForms, curveForms, blockForms, viewForms, markForms)
 
 func concat(families ...[]Form) []Form {
 	var all []Form
@@ -13,12 +13,13 @@ func concat(families ...[]Form) []Form {
 
 // The chapters of the manual.
 const (
-	chLines  = "Lines and planes"
-	chSolids = "Solids and parts"
-	chCurves = "Curves and developments"
-	chBlocks = "Sheets and figures"
-	chViews  = "Views"
-	chMarks  = "Dimensions, lettering, tables"
+	chLines    = "Lines and planes"
+	chOutlines = "Outlines"
+	chSolids   = "Solids and parts"
+	chCurves   = "Curves and developments"
+	chBlocks   = "Sheets and figures"
+	chViews    = "Views"
+	chMarks    = "Dimensions, lettering, tables"
 )
 
 var lineForms = []Form{
@@ -182,7 +183,7 @@ var curveForms = []Form{
 			{Word: "by", Takes: []Kind{KPlane}, Max: 1, Needed: true, Help: "The cutting plane."},
 		},
 		Measures: []Measure{
-			{Name: "kind", Kind: KText, Help: "circle, ellipse, parabola, hyperbola, point, line, two lines or outline."},
+			{Name: "kind", Kind: KText, Help: "circle, ellipse, parabola, hyperbola, point, line, two lines, or polygon for a solid with plane faces only."},
 			{Name: "eccentricity", Kind: KNumber, Help: "The eccentricity; 0 for a circle, 1 for a parabola."},
 			{Name: "focus", Kind: KPoint, Args: number, Help: "A focus.", Example: "S.focus(1)"},
 			{Name: "vertex", Kind: KPoint, Args: number, Help: "A vertex on the major axis.", Example: "S.vertex(1)"},

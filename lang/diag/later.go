@@ -42,6 +42,7 @@ func evalCodes() []Entry {
 	c := func(code Code, meaning, example string) Entry { return Entry{code, StageEval, meaning, example} }
 	return []Entry{
 		c("bad-arithmetic", "A calculation has no result, as a division by zero.", "a = 3 mm/(2 - 2)\n"),
+		c("bad-outline", "An outline crosses, touches or folds back on itself.", "L = outline through (0, 0), (10 mm, 0), (0, 10 mm), (10 mm, 10 mm)\n"),
 		c("cannot-unroll", "A curved face cannot be laid flat, as one of which nothing is left.", "C = cylinder radius 50 mm height 20 mm\nP = plane through (20 mm, 0, 0) normal rightward\nQ = plane through (-20 mm, 0, 0) normal rightward\nR = plane through (0, 20 mm, 0) normal rearward\nT = plane through (0, -20 mm, 0) normal rearward\nB = part of C left_of P right_of Q in_front_of R behind T\nD = development of B\n"),
 		c("directions-parallel", "Two directions that should fix a plane are parallel.", "P = plane through (0, 0, 0) along rightward, leftward\n"),
 		c("needs-number", "A section has two of what was asked for, so a number is needed.", cone+"P = plane through (0, 0, 120 mm) tilt 30° facing 0°\nS = section of K by P\na = S.focus\n"),
@@ -64,6 +65,7 @@ func evalCodes() []Entry {
 		c("points-in-line", "Three points that should fix a plane lie in one line.", "P = plane through (0, 0, 0), (1 mm, 1 mm, 0), (3 mm, 3 mm, 0)\n"),
 		c("several-features", "A feature is asked for and several fit.", cone+"a = K.face(K)\n"),
 		c("too-many-tolerances", "More givens have a tolerance than corners can be tried.", tolerances()),
+		c("wrong-side", "A prism or pyramid would leave the plane of its base on the side away from the normal.", "R = rectangle width 80 mm depth 60 mm\nY = pyramid on R apex (0, 0, -50 mm)\n"),
 		c("verify-fails", "A condition of the file does not hold.", cone+"verify K.slant < 250 mm \"must come out of a 250 mm strip\"\n"),
 	}
 }

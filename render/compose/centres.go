@@ -10,7 +10,7 @@ import (
 	"epure/render/drawing"
 )
 
-// Centre lines. A solid of revolution has its axis where it is seen from the
+// Centre lines. A solid of revolution, and one on an even outline, has its axis where it is seen from the
 // side and a cross where it is seen end-on. Parts of one solid share them, and
 // so do the uncut solid drawn thin and the part drawn wide.
 
@@ -54,12 +54,15 @@ next:
 func (p *picture) drawCentres() {
 	var crosses []cross
 	for _, t := range p.turnedSolids() {
-		axis := t.root.Base.Z
+		axis, ok := t.root.Centreline()
+		if !ok {
+			continue
+		}
 		if math.Hypot(axis.Dot(p.frame.X), axis.Dot(p.frame.Y)) <= foldSine {
 			crosses = addCross(crosses, cross{t.root.Name, p.flatten(t.root.Base.O), p.partsBox(t)})
 			continue
 		}
-		p.drawAxis(t)
+		p.drawAxis(t, axis)
 	}
 	for _, c := range crosses {
 		p.drawCross(c)
@@ -68,12 +71,12 @@ func (p *picture) drawCentres() {
 
 // drawAxis draws the axis as far as the outline of the parts reaches along it. Axes
 // that lie on one line are drawn as one.
-func (p *picture) drawAxis(t turnedSolid) {
+func (p *picture) drawAxis(t turnedSolid, axis vec.V3) {
 	o := p.flatten(t.root.Base.O)
-	d := p.flatten(t.root.Base.O.Add(t.root.Base.Z)).Sub(o).Unit()
+	d := p.flatten(t.root.Base.O.Add(axis)).Sub(o).Unit()
 	lo, hi := p.outlineAlong(t, o, d)
 	if !(lo < hi) {
-		lo, hi = p.boundsAlong(t, o)
+		lo, hi = p.boundsAlong(t, o, axis)
 	}
 	a, b := o.Along(d, lo), o.Along(d, hi)
 	for i := range p.strokes {
@@ -112,13 +115,13 @@ func (p *picture) outlineAlong(t turnedSolid, o, d vec.V2) (lo, hi float64) {
 }
 
 // boundsAlong is the extent of the parts along their axis, as seen.
-func (p *picture) boundsAlong(t turnedSolid, o vec.V2) (lo, hi float64) {
+func (p *picture) boundsAlong(t turnedSolid, o vec.V2, axis vec.V3) (lo, hi float64) {
 	lo, hi = math.Inf(1), math.Inf(-1)
 	for _, s := range t.parts {
 		a, b := s.Body.Bounds(t.root.Base)
 		lo, hi = min(lo, a.Z), max(hi, b.Z)
 	}
-	seen := p.flatten(t.root.Base.O.Add(t.root.Base.Z)).Sub(o).Len()
+	seen := p.flatten(t.root.Base.O.Along(axis, 1/axis.Dot(t.root.Base.Z))).Sub(o).Len()
 	return lo * seen, hi * seen
 }
 

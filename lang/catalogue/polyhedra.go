@@ -1,0 +1,92 @@
+package catalogue
+
+var outlineMeasures = []Measure{
+	{Name: "area", Kind: KArea, Help: "The area inside."},
+	{Name: "perimeter", Kind: KLength, Help: "The length round."},
+	{Name: "centroid", Kind: KPoint, Help: "The centre of the area."},
+}
+
+var (
+	onPlane = Clause{Word: "on", Takes: []Kind{KPlane}, Max: 1, Default: "ground", Help: "The plane in which it lies; (0, 0) is the point that the plane goes through."}
+	centred = Clause{Word: "centre", Takes: []Kind{KPlace}, Max: 1, Default: "(0, 0)", Help: "Its centre in the plane."}
+)
+
+var outlineForms = []Form{
+	{
+		Word: "rectangle", Chapter: chOutlines, Kind: Kind{Class: Outline, Type: "rectangle"},
+		Help: "A rectangle.",
+		Clauses: []Clause{
+			{Word: "width", Takes: []Kind{KLength}, Max: 1, Needed: true, Help: "The size along x of the plane."},
+			{Word: "depth", Takes: []Kind{KLength}, Max: 1, Needed: true, Help: "The size along y of the plane."},
+			centred, onPlane,
+		},
+		Measures: outlineMeasures,
+		Example:  "P = plane through (0, 0, 50 mm) normal upward\nR = rectangle width 80 mm depth 60 mm centre (10 mm, 0) on P\n", Subject: "R",
+	},
+	{
+		Word: "regular", Chapter: chOutlines, Kind: Kind{Class: Outline, Type: "regular"},
+		Help: "A regular polygon.",
+		Clauses: []Clause{
+			{Word: "sides", Takes: []Kind{KNumber}, Max: 1, Needed: true, Help: "The number of sides, 3 to 60."},
+			{Word: "radius", Takes: []Kind{KLength}, Max: 1, Help: "The distance from its centre to a corner."},
+			{Word: "across_flats", Takes: []Kind{KLength}, Max: 1, Help: "Twice the distance from its centre to a side."},
+			{Word: "first", Takes: []Kind{KAngle}, Max: 1, Default: "0°", Help: "The angle of the first corner, from x of the plane anticlockwise."},
+			centred, onPlane,
+		},
+		Choices:  []Choice{{Ways: [][]string{{"radius"}, {"across_flats"}}}},
+		Measures: outlineMeasures,
+		Example:  "H = regular sides 6 across_flats 40 mm first 30° centre (10 mm, 20 mm) on ground\nT = regular sides 3 radius 30 mm\n", Subject: "H",
+	},
+	{
+		Word: "outline", Chapter: chOutlines, Kind: KOutline,
+		Help: "A polygon through corners; it closes itself.",
+		More: "The corners may run either way round. Sides must not cross or touch each other.",
+		Clauses: []Clause{
+			{Word: "through", Takes: []Kind{KPlace}, Needed: true, Help: "The corners (x, y) in the plane."},
+			onPlane,
+		},
+		Measures: outlineMeasures,
+		Example:  "L = outline through (0, 0), (80 mm, 0), (80 mm, 20 mm), (20 mm, 20 mm), (20 mm, 60 mm), (0, 60 mm) on ground\n", Subject: "L",
+	},
+}
+
+var polyhedronMeasures = []Measure{
+	{Name: "volume", Kind: KVolume, Help: "The volume."},
+	{Name: "lateral_area", Kind: KArea, Help: "The area of the sides."},
+	{Name: "base_area", Kind: KArea, Help: "The area of the base."},
+	{Name: "top_area", Kind: KArea, Help: "The area of the top; zero for a pyramid with an apex."},
+	{Name: "area", Kind: KArea, Help: "The area of all faces."},
+	{Name: "centroid", Kind: KPoint, Help: "The centre of the volume."},
+	{Name: "height", Kind: KLength, Help: "The height, square to the base."},
+	{Name: "axis", Kind: KLine, Help: "The line from the centre of the base to the apex or to the centre of the top."},
+	{Name: "base", Kind: KFace, Help: "The base."},
+	{Name: "top", Kind: KFace, Help: "The top of a prism or frustum.", Example: "T.top"},
+	{Name: "face", Kind: KFace, Args: faceOf.Args, Help: faceOf.Help, Example: "$.face($.base)"},
+}
+
+var flatForms = []Form{
+	{
+		Word: "prism", Chapter: chSolids, Kind: Kind{Class: Solid, Type: "prism"},
+		Help: "A prism on an outline.",
+		Clauses: []Clause{
+			{Word: "on", Takes: []Kind{KOutline}, Max: 1, Needed: true, Help: "The outline of its base."},
+			{Word: "height", Takes: []Kind{KLength}, Max: 1, Needed: true, Help: "The height, square to the base."},
+			{Word: "along", Takes: []Kind{KDirection, KPoint, KLine}, Max: 1, Default: "square to the base", Help: "The direction of its edges, on the side of the plane's normal."},
+		},
+		Measures: polyhedronMeasures,
+		Example:  "R = rectangle width 80 mm depth 60 mm\nT = prism on R height 40 mm along (1, 0, 2)\n", Subject: "T",
+	},
+	{
+		Word: "pyramid", Chapter: chSolids, Kind: Kind{Class: Solid, Type: "pyramid"},
+		Help: "A pyramid on an outline, or with `top_height` a frustum of one.",
+		Clauses: []Clause{
+			{Word: "on", Takes: []Kind{KOutline}, Max: 1, Needed: true, Help: "The outline of its base."},
+			{Word: "height", Takes: []Kind{KLength}, Max: 1, Help: "The height of the apex over the centre of the base."},
+			{Word: "apex", Takes: []Kind{KPoint}, Max: 1, Help: "The apex, on the side of the plane's normal."},
+			{Word: "top_height", Takes: []Kind{KLength}, Max: 1, Help: "The height at which it is cut off, level with the base."},
+		},
+		Choices:  []Choice{{Ways: [][]string{{"height"}, {"apex"}}}},
+		Measures: append(append([]Measure(nil), polyhedronMeasures...), Measure{Name: "apex", Kind: KPoint, Help: "The apex; of a frustum, where its edges meet."}),
+		Example:  "R = rectangle width 80 mm depth 60 mm\nY = pyramid on R height 100 mm\nT = pyramid on R apex (20 mm, 10 mm, 100 mm) top_height 40 mm\n", Subject: "Y",
+	},
+}
