@@ -57,7 +57,7 @@ type Constructor func(c *Call) (scene.Value, *Fail)
 func Constructors() map[string]Constructor {
 	return map[string]Constructor{
 		"line": line, "plane": plane, "rectangle": rectangle, "regular": regular, "outline": outline,
-		"cone": cone, "cylinder": cylinder, "prism": prism, "pyramid": pyramid, "part": part,
+		"cone": cone, "cylinder": cylinder, "prism": prism, "pyramid": pyramid, "part": part, "copy": copyOf,
 		"section": section, "focal_sphere": focalSphere, "development": development, "titles": titles,
 	}
 }

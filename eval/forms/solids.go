@@ -96,11 +96,16 @@ func (c *Call) baseFrame() (vec.Frame, *Fail) {
 	if c.Has("at") {
 		o = c.point("at", 0)
 	}
+	return baseOn(o, z), nil
+}
+
+// baseOn is the frame of a base about o whose Z runs along the unit vector z.
+func baseOn(o, z vec.V3) vec.Frame {
 	f := vec.AxisFrame(o, z)
 	if f.Z.Dot(z) < 0 { // an axis that points down: turn the frame over
 		f.Y, f.Z = f.Y.Neg(), f.Z.Neg()
 	}
-	return f, nil
+	return f
 }
 
 // solid completes a primitive and makes its body.

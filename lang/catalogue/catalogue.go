@@ -77,6 +77,7 @@ type Form struct {
 	Clauses  []Clause
 	Choices  []Choice
 	Kind     Kind
+	KindOf   string // the clause whose value has the kind of the thing, and with it the measures
 	Measures []Measure
 	Block    bool     // opens a block with {
 	Within   []string // the forms of the blocks in which it stands; empty: outside of blocks

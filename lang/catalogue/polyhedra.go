@@ -64,6 +64,24 @@ var polyhedronMeasures = []Measure{
 	{Name: "face", Kind: KFace, Args: faceOf.Args, Help: faceOf.Help, Example: "$.face($.base)"},
 }
 
+var copyForms = []Form{
+	{
+		Word: "copy", Chapter: chSolids, Kind: KSolid, KindOf: "of",
+		Help: "A solid or part once more, somewhere else.",
+		More: "It is mirrored first, then turned, then moved. It has the measures of the solid that it copies; its faces carry its own name, and what a plane cut is still named after the plane. Angles about its axis start where those of any solid do.",
+		Clauses: []Clause{
+			{Word: "of", Takes: []Kind{KSolid}, Max: 1, Needed: true, Help: "The solid or part."},
+			{Word: "mirror", Takes: []Kind{KPlane}, Max: 1, Help: "A plane in which it is mirrored: the opposite hand."},
+			{Word: "turn", Takes: []Kind{KAngle}, Max: 1, Help: "The angle by which it is turned, anticlockwise looking against the line."},
+			{Word: "about", Takes: []Kind{KLine}, Max: 1, Help: "The line about which it is turned."},
+			{Word: "at", Takes: []Kind{KPoint}, Max: 1, Help: "Where the centre of its base comes to lie."},
+		},
+		Choices: []Choice{{Ways: [][]string{{}, {"turn", "about"}}}, {Any: true, Ways: [][]string{{"mirror"}, {"turn"}, {"at"}}}},
+		Example: "K = cone diameter 240 mm height 260 mm\nP = plane through (0, 0, 120 mm) tilt 30° facing 0°\nB = part of K below P\nL = line through (300 mm, 0, 0) along upward\n" +
+			"M = copy of B mirror side\nT = copy of B turn 120° about L\nN = copy of K at (0, 400 mm, 0)\nF = copy of B mirror frontal turn 90° about L at (0, 0, 50 mm)\n", Subject: "M",
+	},
+}
+
 var flatForms = []Form{
 	{
 		Word: "prism", Chapter: chSolids, Kind: Kind{Class: Solid, Type: "prism"},

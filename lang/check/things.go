@@ -20,6 +20,9 @@ func (c *checker) thing(s *Symbol) {
 		c.clause(s, &cl)
 	}
 	c.present(s)
+	if b := s.Clauses[s.Form.KindOf]; b != nil && len(b.Values) > 0 {
+		s.Kind = c.model.kinds[b.Values[0]]
+	}
 }
 
 // thing is the form behind a symbol as written.

@@ -1,0 +1,37 @@
+package eval
+
+import (
+	"testing"
+
+	"epure/eval/scene"
+)
+
+// TestCopies: a copy has the volume, areas and generators of what it copies, where the motion
+// takes them; the opposite hand has its pattern mirrored.
+func TestCopies(t *testing.T) {
+	s := clean(t, "copies", `
+K = cone radius 60 mm top_radius 20 mm height 90 mm at (10 mm, 20 mm, 30 mm) axis (1, 2, 5)
+P = plane through (10 mm, 20 mm, 60 mm) tilt 25° facing 40°
+B = part of K below P
+L = line through (200 mm, 0, 0) along (1, 1, 3)
+T = copy of B turn 73° about L
+M = copy of B mirror side
+R = outline through (0, 0), (50 mm, 0), (50 mm, 10 mm), (10 mm, 30 mm) on P
+A = prism on R height 30 mm along (0, 1, 4)
+Q = plane through A.centroid normal (1, 0, 3)
+C = part of A above Q
+D = copy of C mirror P turn 30° about L at (5 mm, 6 mm, 7 mm)
+Y = copy of A mirror side
+
+verify T.volume = B.volume
+verify T.lateral_area = B.lateral_area
+verify M.volume = B.volume
+verify M.area = B.area
+verify D.volume = C.volume
+verify D.area = C.area
+`[1:])
+
+	b, m := value(t, s, "B.centroid").(scene.Triple), value(t, s, "M.centroid").(scene.Triple)
+	close(t, "mirrored x", m.V.X, -b.V.X, 1e-11)
+	close(t, "mirrored z", m.V.Z, b.V.Z, 1e-11)
+}
