@@ -123,7 +123,7 @@ func (e *evaluator) view(sym *check.Symbol) scene.Value {
 	}
 	v := &scene.View{
 		Form: sym.Form.Word, Name: e.viewName(sym), Named: sym.Name != "", Span: sym.Span, Title: e.text(sym.Text),
-		Scale: e.scale(sym, call), At: placeAt(call), Show: shown(call),
+		Scale: e.scale(sym, call), At: placeAt(call), Show: shown(sym.Form.Word, call),
 	}
 	if b := sym.Clauses["of"]; b != nil {
 		v.Of = subjects(b.Values, call.Values["of"])
@@ -168,6 +168,9 @@ func (e *evaluator) sight(sym *check.Symbol, call *formsCall, v *scene.View) boo
 		v.Along = vec.V3{Z: -1}
 	case "elevation":
 		v.Along = vec.V3{Y: 1}
+	case "pictorial":
+		f := pictorial(strings.Join(call.Words["as"], ""))
+		v.Image, v.Along = &f, f.Z.Neg()
 	case "true_shape":
 		v.Along = v.Of[0].Value.(*scene.Section).Plane.Z.Neg()
 	}
@@ -192,9 +195,9 @@ func (e *evaluator) sight(sym *check.Symbol, call *formsCall, v *scene.View) boo
 }
 
 // shown is what a view draws besides its subjects: hidden lines and centre
-// lines unless taken away, and what is asked for.
-func shown(call *formsCall) map[string]bool {
-	show := map[string]bool{"hidden": true, "centres": true}
+// lines unless taken away (a pictorial has none of itself), and what is asked for.
+func shown(form string, call *formsCall) map[string]bool {
+	show := map[string]bool{"hidden": form != "pictorial", "centres": form != "pictorial"}
 	for _, w := range call.Words["show"] {
 		show[w] = true
 	}

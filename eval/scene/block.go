@@ -26,11 +26,14 @@ type Block struct {
 
 // View is one view, true shape or pattern in a block.
 type View struct {
-	Form  string // "elevation", "plan", "view", "true_shape", "pattern"
+	Form  string // "elevation", "plan", "view", "pictorial", "true_shape", "pattern"
 	Name  string // from the source, or the form with a number when it has none
 	Named bool   // the source names it
 	Span  source.Span
 	Along vec.V3 // direction of sight, unit; not for a pattern. For a true shape against the plane's normal
+	// Image is the frame of a pictorial, nil for other views: its X and Y are the rows that take a point to the
+	// paper and need not be unit vectors nor square to each other; Z points at the viewer.
+	Image *vec.Frame
 	// Of are the things drawn: values *Solid, *Plane, *Line, *Section, *Sphere, Triple (points), *Development.
 	Of    []Subject
 	Faint []Subject // uncut solids, drawn thin

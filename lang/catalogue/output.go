@@ -122,6 +122,19 @@ var viewForms = []Form{
 		Subject: "aux",
 	},
 	{
+		Word: "pictorial", Chapter: chViews, Kind: KView, Text: Maybe, Within: sheetBlocks,
+		Help: "A pictorial view of ISO 5456-3, from the right, in front and above.",
+		More: "Lengths along the axes keep their size; in a dimetric and a cabinet view those from front to back are halved. Hidden lines and centre lines are drawn only when asked for, and nothing is dimensioned on it.",
+		Clauses: []Clause{
+			{Word: "of", Takes: []Kind{KSolid, KLine, KSection, KPoint}, Needed: true, Help: "What is drawn: solids, lines, sections, points."},
+			{Word: "as", Words: []string{"isometric", "dimetric", "cavalier", "cabinet", "planometric"}, Max: 1, Default: "isometric", Help: "The kind."},
+			{Word: "faint", Takes: []Kind{KSolid}, Help: "Solids drawn thin behind, as before cutting."},
+			placeClause, ownScale, showClause, lessClause,
+		},
+		Example: drawnExample + "hood = sheet \"Rain hood\" {\n    pic = pictorial \"Isometric view\" of B as isometric faint K show hidden without centres\n    pictorial of B as cabinet\n}\nsecond = sheet \"Oblique\" {\n    pictorial of B as planometric at (40 mm, 60 mm) scale 1:5\n}\n",
+		Subject: "pic",
+	},
+	{
 		Word: "true_shape", Chapter: chViews, Kind: KView, Text: Maybe, Within: sheetBlocks,
 		Help: "A section seen square to its plane.",
 		Clauses: viewClauses(

@@ -274,6 +274,9 @@ func trueElsewhere(a scene.Anchor, set []*picture) string {
 func (p *picture) seenTrue(a scene.Anchor) bool {
 	level := func(v vec.V3) bool { return math.Abs(v.Unit().Dot(p.frame.Z)) <= trueSine }
 	square := func(v vec.V3) bool { return math.Abs(math.Abs(v.Unit().Dot(p.frame.Z))-1) <= trueSine }
+	if p.view.Form == "pictorial" {
+		return false // lengths along the axes are to scale, but nothing is seen square on
+	}
 	pattern := p.view.Form == "pattern"
 	switch a := a.(type) {
 	case scene.Linear:

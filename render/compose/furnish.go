@@ -48,7 +48,7 @@ func (j *job) titleBlock(p furniture.Paper, a *attempt) furniture.TitleBlock {
 func (a *attempt) projections() int {
 	n := 0
 	for _, d := range a.drafts {
-		if d.p.view.Form != "pattern" && d.p.view.Form != "true_shape" {
+		if d.p.view.Form != "pattern" && d.p.view.Form != "true_shape" && d.p.view.Form != "pictorial" {
 			n++
 		}
 	}

@@ -47,6 +47,9 @@ func (j *job) picture(v *scene.View, made map[*scene.View]*picture, stand bool, 
 
 // viewFrame is the frame of a view that stands free: the section's plane for a true shape.
 func viewFrame(v *scene.View) vec.Frame {
+	if v.Image != nil {
+		return *v.Image
+	}
 	if v.Along == (vec.V3{}) {
 		for _, s := range v.Of {
 			if sec, ok := s.Value.(*scene.Section); ok && sec.Section != nil {
@@ -170,7 +173,7 @@ func (j *job) fillView(p *picture) {
 		p.drawGenerators(j.block)
 	}
 	p.drawConstruction(j.scene)
-	if len(p.caption) == 0 && p.view.Form == "view" {
+	if len(p.caption) == 0 && (p.view.Form == "view" || p.view.Form == "pictorial") {
 		p.caption = []string{"View " + p.name}
 	}
 }
