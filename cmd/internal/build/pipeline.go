@@ -4,7 +4,6 @@ import (
 	"fmt"
 	"slices"
 	"strconv"
-	"strings"
 	"time"
 
 	"epure/cmd/internal/host"
@@ -115,6 +114,7 @@ func (u *Unit) compose() {
 			u.sheet(sc, b)
 		}
 	}
+	Namesakes(u)
 }
 
 func (u *Unit) sheet(sc *scene.Scene, b *scene.Block) {
@@ -186,7 +186,3 @@ func date(h *host.Host) string {
 	}
 	return time.Unix(seconds, 0).UTC().Format(time.DateOnly)
 }
-
-// FoldName returns the name under which a file system that does not tell
-// capitals from small letters keeps a file.
-func FoldName(name string) string { return strings.ToLower(name) }

@@ -18,9 +18,6 @@ func (s *session) check() (int, error) {
 		return Usage, err
 	}
 	s.run(units, build.Job{All: true, Compose: true})
-	for i := range units {
-		namesake(units[i : i+1])
-	}
 	out := s.words
 	if s.call.JSON {
 		out = func(ds []diag.Diagnostic) error { return writing(diag.WriteJSON(s.data, ds)) }

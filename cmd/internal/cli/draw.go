@@ -5,8 +5,6 @@ import (
 	"slices"
 
 	"epure/cmd/internal/build"
-	"epure/lang/diag"
-	"epure/lang/source"
 )
 
 // draw writes the output blocks of the files. A file with an error or a verify
@@ -27,7 +25,7 @@ func (s *session) draw() (int, error) {
 // drawUnits draws loaded units and returns the status and a line that sums up.
 func (s *session) drawUnits(units []*build.Unit) (status int, sum string, err error) {
 	s.run(units, build.Job{Compose: true, Formats: s.call.Formats})
-	namesake(units)
+	build.Namesakes(units...)
 	status, err = s.report(units, s.words)
 	if err != nil || status == Failed {
 		return status, "", err
@@ -96,23 +94,4 @@ func (s *session) announce(u *build.Unit, o build.Outcome) error {
 	}
 	_, err := s.data.WriteString(o.Path + "\n")
 	return err
-}
-
-// namesake reports two drawings whose files would have one name: the second
-// would silently replace the first. Capitals do not tell names apart on every disk.
-func namesake(units []*build.Unit) {
-	first := map[string]source.Span{}
-	for _, u := range units {
-		for _, sheet := range u.Sheets {
-			name := build.FoldName(sheet.Name)
-			at, taken := first[name]
-			if !taken {
-				first[name] = sheet.At
-				continue
-			}
-			u.Bag.Add(diag.New("same-output", sheet.At, "two drawings are named "+source.Quote(sheet.Name)).
-				Because("the name of a drawing begins the name of its file, and the second would replace the first").
-				WithNote(at, "the first one is here"))
-		}
-	}
 }
