@@ -72,7 +72,6 @@ func (e *evaluator) thing(sym *check.Symbol, v scene.Value) *scene.Thing {
 	t := &scene.Thing{Name: sym.Name, Span: sym.Span, Value: v, Form: "value"}
 	switch {
 	case sym.Given != nil:
-		t.Form = "given"
 		t.Text = e.text(sym.Given.Text)
 	case sym.Form != nil:
 		t.Form = sym.Form.Word

@@ -23,7 +23,7 @@ type Scene struct {
 // Thing is one named statement.
 type Thing struct {
 	Name  string
-	Form  string // "cone", "section", "value", "given" ...
+	Form  string // "cone", "section" ..., "value" for values and givens
 	Text  string // the words behind it, if any
 	Span  source.Span
 	Value Value

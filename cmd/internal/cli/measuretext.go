@@ -25,7 +25,7 @@ func (r row) label() string {
 }
 
 // bare says whether the row is all there is of its thing: a value or a given.
-func (r row) bare() bool { return r.thing.Form == "value" || r.thing.Form == "given" }
+func (r row) bare() bool { return r.thing.Form == "value" }
 
 // valueMeasure is the one measure of a value or a given.
 const valueMeasure = "value"
