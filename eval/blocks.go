@@ -131,6 +131,9 @@ func (e *evaluator) view(sym *check.Symbol) scene.Value {
 	if b := sym.Clauses["faint"]; b != nil {
 		v.Faint = subjects(b.Values, call.Values["faint"])
 	}
+	if v.Form == "section_view" && !e.cutAway(sym, call, v) {
+		return unknown
+	}
 	if from := call.Values["from"]; len(from) > 0 {
 		v.From = from[0].(*scene.View)
 	}
@@ -195,9 +198,10 @@ func (e *evaluator) sight(sym *check.Symbol, call *formsCall, v *scene.View) boo
 }
 
 // shown is what a view draws besides its subjects: hidden lines and centre
-// lines unless taken away (a pictorial has none of itself), and what is asked for.
+// lines unless taken away, a section view its hatching and no hidden lines, a pictorial
+// neither hidden nor centre lines; and what is asked for.
 func shown(form string, call *formsCall) map[string]bool {
-	show := map[string]bool{"hidden": form != "pictorial", "centres": form != "pictorial"}
+	show := map[string]bool{"hidden": form != "pictorial" && form != "section_view", "centres": form != "pictorial", "hatching": form == "section_view"}
 	for _, w := range call.Words["show"] {
 		show[w] = true
 	}

@@ -26,7 +26,7 @@ type Block struct {
 
 // View is one view, true shape or pattern in a block.
 type View struct {
-	Form  string // "elevation", "plan", "view", "pictorial", "true_shape", "pattern"
+	Form  string // "elevation", "plan", "view", "section_view", "pictorial", "true_shape", "pattern"
 	Name  string // from the source, or the form with a number when it has none
 	Named bool   // the source names it
 	Span  source.Span
@@ -34,6 +34,10 @@ type View struct {
 	// Image is the frame of a pictorial, nil for other views: its X and Y are the rows that take a point to the
 	// paper and need not be unit vectors nor square to each other; Z points at the viewer.
 	Image *vec.Frame
+	// By is the cutting plane of a section view, Cut the cut faces, one for each solid that it cuts, and Of
+	// then holds what lies behind the plane.
+	By  *Plane
+	Cut []Subject
 	// Of are the things drawn: values *Solid, *Plane, *Line, *Section, *Sphere, Triple (points), *Development.
 	Of    []Subject
 	Faint []Subject // uncut solids, drawn thin

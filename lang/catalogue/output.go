@@ -122,6 +122,16 @@ var viewForms = []Form{
 		Subject: "aux",
 	},
 	{
+		Word: "section_view", Chapter: chViews, Kind: KView, Text: Maybe, Within: sheetBlocks,
+		Help: "What lies behind a cutting plane, with the cut faces hatched, looking against the plane's normal.",
+		More: "Neighbouring solids are hatched the opposite way. Hidden lines are left out unless asked for. On the view that it comes `from`, the plane is drawn with its name and arrows that show the direction of sight.",
+		Clauses: viewClauses(
+			Clause{Word: "of", Takes: []Kind{KSolid}, Needed: true, Help: "The solids."},
+			Clause{Word: "by", Takes: []Kind{KPlane}, Max: 1, Needed: true, Help: "The cutting plane."}),
+		Example: drawnExample + "M = plane through (0, 0, 0) normal frontward\nhood = sheet \"Rain hood\" {\n    top = plan of B\n    sec = section_view of B by M from top show hidden without centres\n}\nsecond = sheet \"Alone\" {\n    section_view \"M–M\" of B by M at (40 mm, 60 mm) scale 1:5\n}\n",
+		Subject: "sec",
+	},
+	{
 		Word: "pictorial", Chapter: chViews, Kind: KView, Text: Maybe, Within: sheetBlocks,
 		Help: "A pictorial view of ISO 5456-3, from the right, in front and above.",
 		More: "Lengths along the axes keep their size; in a dimetric and a cabinet view those from front to back are halved. Hidden lines and centre lines are drawn only when asked for, and nothing is dimensioned on it.",

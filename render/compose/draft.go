@@ -50,6 +50,7 @@ func newDraft(p *picture, scale float64, k ink, note string) *draft {
 	d.keepRays()
 	d.drawSpots()
 	d.drawSigns()
+	d.drawPointers()
 	d.dimension()
 	d.drawTags()
 	d.nameSpots()

@@ -12,12 +12,19 @@ import (
 func (d *draft) drawHatching() {
 	var marks []drawing.Mark
 	for _, h := range d.p.hatched {
-		path, ok := h.shape(d.scale).(drawing.Path)
-		if !ok {
+		var paths []drawing.Path
+		box := drawing.EmptyBox()
+		for _, o := range h.outlines {
+			if path, ok := o.shape(d.scale).(drawing.Path); ok {
+				paths = append(paths, path)
+				box = box.Union(shapeExtent(path).box())
+			}
+		}
+		if len(paths) == 0 {
 			continue
 		}
 		n := 0
-		for _, l := range drawing.Hatch([]drawing.Path{path}, drawing.HatchAngle, drawing.PitchFor(shapeExtent(path).box())) {
+		for _, l := range drawing.Hatch(paths, h.turn*drawing.HatchAngle, drawing.PitchFor(box)) {
 			for _, part := range d.betweenWords(line{l.A, l.B}) {
 				n++
 				k := h.key

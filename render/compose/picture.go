@@ -28,7 +28,9 @@ type picture struct {
 	strokes   []stroke
 	spots     []spot
 	tags      []tag
-	hatched   []stroke // the outline to be hatched
+	hatched   []hatched  // the areas to be hatched
+	planes    []sighting // section views that look at this one; their planes are drawn
+	points    []pointer
 	signs     []sign   // lettering along lines: seams
 	faces     []sign   // places for the words that say which side is up; one is used
 	bars      bool     // bars of 100 mm to check the print
@@ -58,6 +60,23 @@ type stroke struct {
 	over   float64 // paper mm by which a straight line is drawn out at both ends
 	tip    vec.V2  // if not zero: of a straight line only its end, X paper mm back from it to Y beyond
 	title  string
+}
+
+// hatched is an area to be hatched: closed outlines, even-odd, the lines leaning
+// at turn times the usual angle.
+type hatched struct {
+	key      drawing.Key
+	outlines []stroke
+	turn     float64
+}
+
+// pointer is an arrow at a cutting plane's end: the tip at (view mm) and past (paper mm) further along away,
+// the tail toward from.
+type pointer struct {
+	key        drawing.Key
+	at         vec.V2
+	away, from vec.V2
+	past       float64
 }
 
 // track is a piece of a smooth curve of the view.

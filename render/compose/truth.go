@@ -38,7 +38,7 @@ func (p *picture) drawTruth(name string, s *scene.Section) {
 		}
 		box = box.Union(shapeExtent(outline.shape(1)).box())
 		if p.shows("hatching") {
-			p.hatched = append(p.hatched, outline)
+			p.hatched = append(p.hatched, hatched{outline.key, []stroke{outline}, 1})
 		}
 	}
 	if s.Conic != nil && !box.Empty() {

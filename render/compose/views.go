@@ -80,6 +80,9 @@ func (j *job) foldFrom(p, parent *picture, stand bool) {
 		}
 		return
 	}
+	if p.view.Form == "section_view" && rel == folded {
+		parent.planes = append(parent.planes, sighting{p, u})
+	}
 	if p.view.Form == "view" && rel == folded {
 		parent.sightings = append(parent.sightings, sighting{p, u})
 	}
@@ -172,7 +175,14 @@ func (j *job) fillView(p *picture) {
 	if p.shows("generators") {
 		p.drawGenerators(j.block)
 	}
+	for _, s := range p.planes {
+		p.drawSightedPlane(s)
+	}
+	p.drawCutFaces()
 	p.drawConstruction(j.scene)
+	if len(p.caption) == 0 && p.view.Form == "section_view" {
+		p.caption = []string{p.view.By.Name + "–" + p.view.By.Name}
+	}
 	if len(p.caption) == 0 && (p.view.Form == "view" || p.view.Form == "pictorial") {
 		p.caption = []string{"View " + p.name}
 	}
