@@ -11,8 +11,18 @@ import (
 	"epure/render/font"
 )
 
-// Shapes as the drawing library's paths, in pixels, y up. They are made of the
-// cubics that every writer without arcs draws, never of the library's own arcs.
+// Shapes as the drawing library's paths, in pixels, y up, made of the cubics that
+// every writer without arcs draws. Curves are made polygons before they are
+// dashed or outlined: the library's length of a curve is off by up to a
+// hundredth, and its outline of one cuts the tips of narrow ellipses.
+
+// flatness is the largest distance in pixels of a polygon from its curve: too
+// little to change a grey by more than a twentieth.
+const flatness = 0.05
+
+// coarse is flatness as a part of a path's own size where that is more, which
+// bounds the number of its corners. It takes a path of fifty million pixels.
+const coarse = 1e-9
 
 // page maps paper to pixels: a box of w by h pixels with its origin at the lower
 // left, the sheet's upper left corner in its own.
@@ -26,24 +36,42 @@ func (g page) pixel(p vec.V2) vec.V2 {
 	return vec.V2{X: p.X * g.scale, Y: g.h - (g.height-p.Y)*g.scale}
 }
 
-// cubics returns the shape's line in pixels.
-func (g page) cubics(s drawing.Shape) []drawing.Cubic {
-	var out []drawing.Cubic
-	for _, s := range drawing.Lowered(s) {
-		for i, p := range s.C {
-			s.C[i] = g.pixel(p)
-		}
-		out = append(out, s.C)
+// polygon returns the shape's line.
+func (g page) polygon(s drawing.Shape) *canvas.Path {
+	p := &canvas.Path{}
+	add(p, drawing.Lowered(s), g.pixel)
+	if drawing.Closed(s) {
+		p.Close()
 	}
-	return out
+	return flat(p)
+}
+
+// add adds a chain of strokes to a path, as a part of its own.
+func add(p *canvas.Path, chain []drawing.Stroke, place func(vec.V2) vec.V2) {
+	for i, s := range chain {
+		a, b, c, d := place(s.C[0]), place(s.C[1]), place(s.C[2]), place(s.C[3])
+		if i == 0 {
+			p.MoveTo(a.X, a.Y)
+		}
+		if s.Straight {
+			p.LineTo(d.X, d.Y)
+		} else {
+			p.CubeTo(b.X, b.Y, c.X, c.Y, d.X, d.Y)
+		}
+	}
+}
+
+func flat(p *canvas.Path) *canvas.Path {
+	b := p.FastBounds()
+	return p.Flatten(max(flatness, coarse*max(b.W(), b.H())))
 }
 
 // inside returns the path whose inside the shape's fill paints, even-odd, as one
 // that covers the same when all that it winds round is painted.
 func (g page) inside(s drawing.Shape) *canvas.Path {
-	p := add(&canvas.Path{}, g.cubics(s))
+	p := g.polygon(s)
 	p.Close()
-	return p.Flatten(canvas.PixelTolerance).Settle(canvas.EvenOdd)
+	return p.Settle(canvas.EvenOdd)
 }
 
 // letters returns the outlines of a line of lettering; inner outlines turn the
@@ -55,97 +83,49 @@ func (g page) letters(t drawing.Text) *canvas.Path {
 	at, _ := font.Start(t)
 	x := drawing.Dir(t.Angle)
 	y := x.Left()
+	place := func(q vec.V2) vec.V2 { return g.pixel(at.Along(x, q.X*size).Along(y, q.Y*size)) }
 	p := &canvas.Path{}
 	for _, r := range font.Clean(t.String) {
 		for _, loop := range f.Outline(r) {
-			var c []drawing.Cubic
-			for _, s := range drawing.Lowered(loop) {
-				for i, q := range s.C {
-					s.C[i] = g.pixel(at.Along(x, q.X*size).Along(y, q.Y*size))
-				}
-				c = append(c, s.C)
-			}
-			p = add(p, c)
+			add(p, drawing.Lowered(loop), place)
 			p.Close()
 		}
 		at = at.Along(x, f.Advance(r)*size)
 	}
-	return p
-}
-
-// add adds a chain of cubics to a path as a part of its own. The library makes a
-// line of a cubic that is straight.
-func add(p *canvas.Path, chain []drawing.Cubic) *canvas.Path {
-	for i, c := range chain {
-		if i == 0 {
-			p.MoveTo(c[0].X, c[0].Y)
-		}
-		p.CubeTo(c[1].X, c[1].Y, c[2].X, c[2].Y, c[3].X, c[3].Y)
-	}
-	return p
+	return flat(p)
 }
 
 // unsettled makes the library leave outlines as they come, to be painted wherever
 // they wind. Its other way, uniting them first, loses ink where lines cross.
 var unsettled = sync.OnceFunc(func() { canvas.FastStroke = true })
 
+// mostDashes bounds the dashes of one line. One with more runs far off any
+// sheet, and is drawn continuous.
+const mostDashes = 1 << 16
+
 // line returns the outline of the shape's line as the pen draws it: round ends
 // for a continuous line, butt ends for dashes, like every writer.
 func (g page) line(s drawing.Shape, pen drawing.Pen) *canvas.Path {
 	unsettled()
 	width := pen.Width * g.scale
+	p := g.polygon(s)
 	dashes := drawing.DashesFor(pen, s)
-	for i := range dashes {
-		dashes[i] *= g.scale * (1 + dashSlack)
-	}
-	var ends canvas.Capper = canvas.RoundCap
-	if dashes != nil {
-		ends = canvas.ButtCap
-	}
-	chain := g.cubics(s)
-	closed := drawing.Closed(s)
-	out := &canvas.Path{}
-	if closed && dashes == nil && narrow(chain, width) {
-		return around(chain, width)
-	}
-	near := g.near(chain, width)
-	for _, n := range near {
-		p := add(&canvas.Path{}, n.chain)
-		switch {
-		case p.Empty() && dashes == nil:
-			out = out.Append(canvas.Circle(width/2).Translate(n.chain[0][0].X, n.chain[0][0].Y))
-			continue
-		case closed && len(near) == 1 && n.whole:
-			p.Close()
+	if dashes != nil && drawing.Length(s) < mostDashes*pen.Width {
+		for i := range dashes {
+			dashes[i] *= g.scale
 		}
-		if dashes != nil {
-			p = p.Dash(math.Mod(n.before, period(dashes)), dashes...)
-		}
-		out = out.Append(p.Stroke(width, ends, canvas.RoundJoin, canvas.PixelTolerance))
+		return g.seen(p.Dash(0, dashes...), width).Stroke(width, canvas.ButtCap, canvas.RoundJoin, flatness)
 	}
-	return out
+	if from, _, ok := drawing.Ends(s); ok && p.Empty() {
+		at := g.pixel(from)
+		return canvas.Circle(width/2).Translate(at.X, at.Y)
+	}
+	return g.seen(p, width).Stroke(width, canvas.RoundCap, canvas.RoundJoin, flatness)
 }
 
-// around returns the outer edge alone of a closed line that leaves no paper
-// inside: its inner edge, turned inside out, would be a hole.
-func around(chain []drawing.Cubic, width float64) *canvas.Path {
-	p := add(&canvas.Path{}, chain)
-	p.Close()
-	if !p.CCW() {
-		width = -width
-	}
-	return p.Offset(width/2, canvas.PixelTolerance)
-}
-
-// dashSlack stretches a dash pattern so that the line surely ends within its last
-// dash: the library drops a last dash that ends before the line does by its own
-// count, whose error is smaller for curves cut by straightEnough.
-const dashSlack = 1e-6
-
-func period(dashes []float64) float64 {
-	sum := 0.0
-	for _, d := range dashes {
-		sum += d
-	}
-	return sum
+// seen cuts off what is so far outside the page that the pen does not reach in:
+// the library's painter takes coordinates of 2^25 pixels at most.
+func (g page) seen(p *canvas.Path, width float64) *canvas.Path {
+	far := math.Ceil(width) + 1
+	return p.Clip(-far, -far, g.w+far, g.h+far)
 }
