@@ -123,9 +123,15 @@ func (g page) line(s drawing.Shape, pen drawing.Pen) *canvas.Path {
 	return g.seen(p, width).Stroke(width, canvas.RoundCap, canvas.RoundJoin, flatness)
 }
 
-// seen cuts off what is so far outside the page that the pen does not reach in:
-// the library's painter takes coordinates of 2^25 pixels at most.
+// farthest is the largest coordinate in pixels that is left to the library's painter, which takes 2^25 at most.
+const farthest = 1 << 24
+
+// seen cuts off what is outside the page where a path runs so far off it that the painter
+// could not take it. Cutting joins dashes that lie on one line, so it is not done for nothing.
 func (g page) seen(p *canvas.Path, width float64) *canvas.Path {
+	if b := p.FastBounds(); min(b.X0, b.Y0) > -farthest && max(b.X1, b.Y1) < farthest {
+		return p
+	}
 	far := math.Ceil(width) + 1
 	return p.Clip(-far, -far, g.w+far, g.h+far)
 }
