@@ -172,8 +172,15 @@ func (e *evaluator) sight(sym *check.Symbol, call *formsCall, v *scene.View) boo
 	case "elevation":
 		v.Along = vec.V3{Y: 1}
 	case "pictorial":
-		f := pictorial(strings.Join(call.Words["as"], ""))
+		kind := "isometric"
+		if w := call.Words["as"]; len(w) > 0 {
+			kind = w[0]
+		}
+		f := pictorial(kind)
 		v.Image, v.Along = &f, f.Z.Neg()
+		if v.Title == "" {
+			v.Title = strings.ToUpper(kind[:1]) + kind[1:] + " view"
+		}
 	case "true_shape":
 		v.Along = v.Of[0].Value.(*scene.Section).Plane.Z.Neg()
 	}
@@ -211,10 +218,16 @@ func shown(form string, call *formsCall) map[string]bool {
 	return show
 }
 
-// subjects pairs values with how the source calls them.
+// subjects pairs values with how the source calls them; a ring or row becomes its members.
 func subjects(xs []syntax.Expr, vs []scene.Value) []scene.Subject {
 	var out []scene.Subject
 	for i, x := range xs {
+		if g, ok := vs[i].(*scene.Group); ok {
+			for _, s := range g.Solids {
+				out = append(out, scene.Subject{Name: s.Name, Value: s})
+			}
+			continue
+		}
 		out = append(out, scene.Subject{Name: x.Span().Text(), Value: vs[i]})
 	}
 	return out

@@ -57,7 +57,7 @@ type Constructor func(c *Call) (scene.Value, *Fail)
 func Constructors() map[string]Constructor {
 	return map[string]Constructor{
 		"line": line, "plane": plane, "rectangle": rectangle, "regular": regular, "outline": outline,
-		"cone": cone, "cylinder": cylinder, "prism": prism, "pyramid": pyramid, "part": part, "copy": copyOf,
+		"cone": cone, "cylinder": cylinder, "prism": prism, "pyramid": pyramid, "part": part, "copy": copyOf, "ring": ring, "row": row,
 		"section": section, "focal_sphere": focalSphere, "development": development, "titles": titles,
 	}
 }
@@ -92,6 +92,8 @@ func MeasureFuncs(typ string) map[string]MeasureFunc {
 		return outlineMeasures()
 	case "part":
 		return partMeasures()
+	case "ring", "row":
+		return groupMeasures()
 	case "circle":
 		return circleMeasures()
 	case "face":
@@ -120,6 +122,8 @@ func Type(v scene.Value) string {
 			return "part"
 		}
 		return v.Root.Form
+	case *scene.Group:
+		return "ring"
 	case *scene.Outline:
 		return catalogue.KOutline.Type
 	case *scene.Face:

@@ -41,6 +41,12 @@ type Solid struct {
 	Whole *Solid   // the uncut solid; itself when it is uncut
 }
 
+// Group is several solids made alike: a ring or a row.
+type Group struct {
+	Name   string
+	Solids []*Solid // named "R(1)", "R(2)" ...
+}
+
 // Primitive is a solid as it was declared: a right cone, frustum or cylinder, or with Outline set a
 // prism or pyramid, of which only Base (at the centre of the base), Height, Apex and the labels hold; its sides are the faces
 // whose labels begin with SideFace+"(".

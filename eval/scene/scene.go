@@ -90,6 +90,7 @@ func (*Face) value()        {}
 func (*Edge) value()        {}
 func (*Outline) value()     {}
 func (*Solid) value()       {}
+func (*Group) value()       {}
 func (*Section) value()     {}
 func (*Sphere) value()      {}
 func (*Development) value() {}

@@ -23,6 +23,7 @@ const (
 	Edge                     // an edge of a solid
 	Outline                  // a closed outline in a plane
 	Solid                    // a solid
+	Group                    // a ring or row of solids
 	Section                  // a plane section
 	Sphere                   // a sphere
 	Development              // a pattern
@@ -60,6 +61,7 @@ var (
 	KEdge      = Kind{Class: Edge, Type: "edge"}
 	KOutline   = Kind{Class: Outline, Type: "outline"}
 	KSolid     = Kind{Class: Solid}
+	KGroup     = Kind{Class: Group, Type: "ring"}
 	KSection   = Kind{Class: Section, Type: "section"}
 	KSphere    = Kind{Class: Sphere, Type: "focal_sphere"}
 	KPattern   = Kind{Class: Development, Type: "development"}

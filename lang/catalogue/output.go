@@ -26,7 +26,7 @@ func showWords() []string {
 	return words
 }
 
-var drawable = []Kind{KSolid, KPlane, KLine, KSection, KSphere, KPoint}
+var drawable = []Kind{KSolid, KGroup, KPlane, KLine, KSection, KSphere, KPoint}
 
 var (
 	scaleClause = Clause{Word: "scale", Takes: []Kind{KRatio}, Words: []string{"auto"}, Max: 1, Default: "auto", Help: "The scale, as 1:5, or auto for the largest of ISO 5455 at which everything fits."}
@@ -97,7 +97,7 @@ var viewForms = []Form{
 		Help: "A view on an upright plane, looking rearward unless said otherwise.",
 		Clauses: viewClauses(
 			Clause{Word: "of", Takes: drawable, Needed: true, Help: "What is drawn: solids, planes, lines, sections, focal spheres, points."},
-			Clause{Word: "faint", Takes: []Kind{KSolid}, Help: "Solids drawn thin behind, as before cutting."},
+			Clause{Word: "faint", Takes: []Kind{KSolid, KGroup}, Help: "Solids drawn thin behind, as before cutting."},
 			Clause{Word: "along", Takes: []Kind{KDirection, KPoint, KLine}, Max: 1, Default: "rearward", Help: "The direction of sight; level."}),
 		Example: drawnExample + "hood = sheet \"Rain hood\" scale 1:5 {\n    front = elevation \"Front\" of B, P faint K at (30 mm, 150 mm) scale 1:5 show cutting_planes, focal_spheres without hidden\n    left = elevation of B along rightward from front\n}\n",
 		Subject: "front",
@@ -107,7 +107,7 @@ var viewForms = []Form{
 		Help: "The view from above.",
 		Clauses: viewClauses(
 			Clause{Word: "of", Takes: drawable, Needed: true, Help: "What is drawn."},
-			Clause{Word: "faint", Takes: []Kind{KSolid}, Help: "Solids drawn thin behind, as before cutting."}),
+			Clause{Word: "faint", Takes: []Kind{KSolid, KGroup}, Help: "Solids drawn thin behind, as before cutting."}),
 		Example: drawnExample + "hood = sheet \"Rain hood\" {\n    front = elevation of B\n    top = plan of B, S.focus faint K from front show projectors, generators, numbers without centres\n}\nsecond = sheet \"Plan alone\" {\n    plan of B at (40 mm, 60 mm) scale 1:5\n}\n",
 		Subject: "top",
 	},
@@ -117,7 +117,7 @@ var viewForms = []Form{
 		Clauses: viewClauses(
 			Clause{Word: "of", Takes: drawable, Needed: true, Help: "What is drawn."},
 			Clause{Word: "along", Takes: []Kind{KDirection, KPoint, KLine}, Max: 1, Needed: true, Help: "The direction of sight."},
-			Clause{Word: "faint", Takes: []Kind{KSolid}, Help: "Solids drawn thin behind, as before cutting."}),
+			Clause{Word: "faint", Takes: []Kind{KSolid, KGroup}, Help: "Solids drawn thin behind, as before cutting."}),
 		Example: drawnExample + "hood = sheet \"Rain hood\" scale 1:5 {\n    front = elevation of B\n    aux = view \"On the cut\" of B along (1, 0, -1) faint K from front show hidden without centres\n    view of B along (1, 2, -1) at (200 mm, 100 mm) scale 1:10\n}\n",
 		Subject: "aux",
 	},
@@ -126,7 +126,7 @@ var viewForms = []Form{
 		Help: "What lies behind a cutting plane, with the cut faces hatched, looking against the plane's normal.",
 		More: "Neighbouring solids are hatched the opposite way. Hidden lines are left out unless asked for. On the view that it comes `from`, the plane is drawn with its name and arrows that show the direction of sight.",
 		Clauses: viewClauses(
-			Clause{Word: "of", Takes: []Kind{KSolid}, Needed: true, Help: "The solids."},
+			Clause{Word: "of", Takes: []Kind{KSolid, KGroup}, Needed: true, Help: "The solids."},
 			Clause{Word: "by", Takes: []Kind{KPlane}, Max: 1, Needed: true, Help: "The cutting plane."}),
 		Example: drawnExample + "M = plane through (0, 0, 0) normal frontward\nhood = sheet \"Rain hood\" {\n    top = plan of B\n    sec = section_view of B by M from top show hidden without centres\n}\nsecond = sheet \"Alone\" {\n    section_view \"M–M\" of B by M at (40 mm, 60 mm) scale 1:5\n}\n",
 		Subject: "sec",
@@ -136,9 +136,9 @@ var viewForms = []Form{
 		Help: "A pictorial view of ISO 5456-3, from the right, in front and above.",
 		More: "Lengths along the axes keep their size; in a dimetric and a cabinet view those from front to back are halved. Hidden lines and centre lines are drawn only when asked for, and nothing is dimensioned on it.",
 		Clauses: []Clause{
-			{Word: "of", Takes: []Kind{KSolid, KLine, KSection, KPoint}, Needed: true, Help: "What is drawn: solids, lines, sections, points."},
+			{Word: "of", Takes: []Kind{KSolid, KGroup, KLine, KSection, KPoint}, Needed: true, Help: "What is drawn: solids, lines, sections, points."},
 			{Word: "as", Words: []string{"isometric", "dimetric", "cavalier", "cabinet", "planometric"}, Max: 1, Default: "isometric", Help: "The kind."},
-			{Word: "faint", Takes: []Kind{KSolid}, Help: "Solids drawn thin behind, as before cutting."},
+			{Word: "faint", Takes: []Kind{KSolid, KGroup}, Help: "Solids drawn thin behind, as before cutting."},
 			placeClause, ownScale, showClause, lessClause,
 		},
 		Example: drawnExample + "hood = sheet \"Rain hood\" {\n    pic = pictorial \"Isometric view\" of B as isometric faint K show hidden without centres\n    pictorial of B as cabinet\n}\nsecond = sheet \"Oblique\" {\n    pictorial of B as planometric at (40 mm, 60 mm) scale 1:5\n}\n",

@@ -82,6 +82,36 @@ var copyForms = []Form{
 	},
 }
 
+var groupMeasures = []Measure{
+	{Name: "count", Kind: KNumber, Help: "How many there are."},
+	{Name: "volume", Kind: KVolume, Help: "The volume of all of them together."},
+}
+
+var groupForms = []Form{
+	{
+		Word: "ring", Chapter: chSolids, Kind: Kind{Class: Group, Type: "ring"},
+		Help: "A solid or part several times, evenly round a line; the first where it is.",
+		Clauses: []Clause{
+			{Word: "of", Takes: []Kind{KSolid}, Max: 1, Needed: true, Help: "The solid or part."},
+			{Word: "count", Takes: []Kind{KNumber}, Max: 1, Needed: true, Help: "How many, 2 to 1000."},
+			{Word: "about", Takes: []Kind{KLine}, Max: 1, Needed: true, Help: "The line round which they stand."},
+		},
+		Measures: groupMeasures,
+		Example:  "C = cylinder diameter 20 mm height 30 mm at (60 mm, 0, 0)\nL = line through (0, 0, 0) along upward\nR = ring of C count 6 about L\n", Subject: "R",
+	},
+	{
+		Word: "row", Chapter: chSolids, Kind: Kind{Class: Group, Type: "row"},
+		Help: "A solid or part several times, step by step; the first where it is.",
+		Clauses: []Clause{
+			{Word: "of", Takes: []Kind{KSolid}, Max: 1, Needed: true, Help: "The solid or part."},
+			{Word: "count", Takes: []Kind{KNumber}, Max: 1, Needed: true, Help: "How many, 2 to 1000."},
+			{Word: "step", Takes: []Kind{KPoint}, Max: 1, Needed: true, Help: "From one to the next, (x, y, z)."},
+		},
+		Measures: groupMeasures,
+		Example:  "C = cylinder diameter 20 mm height 30 mm\nR = row of C count 4 step (50 mm, 0, 10 mm)\n", Subject: "R",
+	},
+}
+
 var flatForms = []Form{
 	{
 		Word: "prism", Chapter: chSolids, Kind: Kind{Class: Solid, Type: "prism"},

@@ -16,6 +16,8 @@ func name(k catalogue.Kind) string {
 		return tripleName(k.Of)
 	case catalogue.Pair:
 		return "a place (x, y)"
+	case catalogue.Group:
+		return "a ring or row"
 	case catalogue.Outline:
 		return "an outline"
 	case catalogue.Solid:

@@ -27,6 +27,8 @@ func kindName(k catalogue.Kind) string {
 		return tripleName(k.Of, "point", "direction")
 	case catalogue.Pair:
 		return "place (x, y)"
+	case catalogue.Group:
+		return "ring or row"
 	case catalogue.Outline:
 		return "outline"
 	case catalogue.Solid:

@@ -183,7 +183,7 @@ func (j *job) fillView(p *picture) {
 	if len(p.caption) == 0 && p.view.Form == "section_view" {
 		p.caption = []string{p.view.By.Name + "–" + p.view.By.Name}
 	}
-	if len(p.caption) == 0 && (p.view.Form == "view" || p.view.Form == "pictorial") {
+	if len(p.caption) == 0 && p.view.Form == "view" {
 		p.caption = []string{"View " + p.name}
 	}
 }
