@@ -22,22 +22,19 @@ func (e *evaluator) cutAway(sym *check.Symbol, call *formsCall, v *scene.View) b
 	for _, s := range v.Of {
 		of := s.Value.(*scene.Solid)
 		b, err := of.Body.Cut(v.By.Surface(), v.By.Name)
-		var miss *body.CutError
-		switch {
-		case errors.As(err, &miss):
-			if nearest < 0 || miss.Miss < nearest {
-				nearest = miss.Miss
-			}
-			if !miss.Nothing {
-				kept = append(kept, s)
-			}
-			continue
-		case err != nil:
-			panic(err) // Cut fails in no other way
-		}
+		var nothing *body.CutError
+		inFront := errors.As(err, &nothing) && nothing.Nothing
 		face, err := cut.Of(of.Body, v.By.Surface(), v.By.Along)
-		if err != nil {
-			panic(err) // the plane has just cut it
+		var miss *cut.MissError
+		if errors.As(err, &miss) && (nearest < 0 || miss.Miss < nearest) {
+			nearest = miss.Miss
+		}
+		switch {
+		case inFront:
+			continue
+		case miss != nil || nothing != nil:
+			kept = append(kept, s)
+			continue
 		}
 		part := &scene.Solid{Name: of.Name, Body: b, Root: of.Root, Cuts: append(of.Cuts[:len(of.Cuts):len(of.Cuts)], v.By), Whole: of.Whole}
 		kept = append(kept, scene.Subject{Name: s.Name, Value: part})
