@@ -28,6 +28,9 @@ func (j *job) projectors(a *attempt, i int) []drawing.Mark {
 		links = append(links[:len(links):len(links)], p.parent.links...)
 	}
 	for _, q := range links {
+		if !e.shows(q) || !d.shows(q) {
+			continue // a point of what only one of the views draws
+		}
 		from := a.layout.items[up].at.Add(e.at(e.p.flatten(q)))
 		to := a.layout.items[i].at.Add(d.at(p.flatten(q)))
 		if drawn(done, from.Dot(across)) || from.Dist(to) == 0 {
@@ -38,6 +41,12 @@ func (j *job) projectors(a *attempt, i int) []drawing.Mark {
 			Pen: j.ink.pens.Pen(drawing.Projector), Shape: drawing.Line{A: from, B: to}})
 	}
 	return out
+}
+
+// shows tells whether a point of space lies within what the view draws.
+func (d *draft) shows(q vec.V3) bool {
+	at, b := d.at(d.p.flatten(q)), d.core.Grow(projectorsApart)
+	return b.Min.X <= at.X && at.X <= b.Max.X && b.Min.Y <= at.Y && at.Y <= b.Max.Y
 }
 
 // projectorsApart is the distance in mm on paper under which two projectors are
