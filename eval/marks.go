@@ -187,12 +187,12 @@ func stationRows(d *scene.Development, r rounder) [][]string {
 		place = func(turn float64) string { return figureOf(turn*sine, patternAngle) }
 	}
 	rows := [][]string{header}
-	letter := 'a'
+	letters := 0
 	for _, s := range d.Stations {
 		no := fmt.Sprint(s.Number)
 		if s.Number == 0 {
-			no = string(letter)
-			letter++
+			letters++
+			no = scene.Letter(letters)
 		}
 		turn := s.Theta - d.Seam
 		row := []string{no, figureOf(turn, usualAngle), place(turn), r.length(s.Length())}

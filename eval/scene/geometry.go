@@ -123,6 +123,16 @@ type Sphere struct {
 	Of *Section
 }
 
+// Letter is the mark of the n-th station of a pattern that is not an even division, n from 1, on the
+// drawing and in tables: a to z, then aa, ab and so on.
+func Letter(n int) string {
+	s := string(rune('a' + (n-1)%26))
+	if n > 26 {
+		return Letter((n-1)/26) + s
+	}
+	return s
+}
+
 // Development is the pattern of a curved face.
 type Development struct {
 	Name string

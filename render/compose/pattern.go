@@ -84,7 +84,7 @@ func (p *picture) drawStations(name string, d *scene.Development) {
 		seam := i == 0 || i == len(d.Stations)-1
 		if st.Number == 0 {
 			letters++
-			feature, text = ordinal("extreme", letters), letter(letters)
+			feature, text = ordinal("extreme", letters), scene.Letter(letters)
 		} else if i > 0 && seam {
 			feature += "/end"
 		}
@@ -97,10 +97,6 @@ func (p *picture) drawStations(name string, d *scene.Development) {
 	}
 }
 
-// letter is the mark of the n-th station of its own, as the table of true
-// lengths has it: a, b, c ...
-func letter(n int) string { return string(rune('a' + n - 1)) }
-
 func (p *picture) drawSpans(k drawing.Key, st flat.Station) {
 	for j, span := range st.Spans {
 		key := k
@@ -112,11 +108,18 @@ func (p *picture) drawSpans(k drawing.Key, st flat.Station) {
 }
 
 // tagStation writes the mark of a station at both ends, clear of the outline.
-// At a cone's apex all meet, so there only the outer end is marked.
+// At a cone's apex all meet, so there only the outer end is marked; where nothing but a
+// point of the generator is left, that is marked once.
 func (p *picture) tagStation(k drawing.Key, d *scene.Development, i int, text string) {
 	st := d.Stations[i]
 	low, high := st.Spans[0], st.Spans[len(st.Spans)-1]
-	away := high.High.Sub(low.Low).Unit()
+	away := high.High.Sub(low.Low)
+	if away.Len() <= sameLine*d.Of.Body.Size() {
+		lo, hi := d.Bounds()
+		p.tags = append(p.tags, tag{key: k, at: high.High, away: high.High.Sub(lo.Add(hi).Scale(0.5)).Unit(), text: text, small: true})
+		return
+	}
+	away = away.Unit()
 	outer, inner := k, k
 	inner.Feature += "/inner"
 	p.tags = append(p.tags, tag{key: outer, at: high.High, away: away, text: text, small: true, room: rowRoom(d, i, true), row: st.Number, wide: itoa(d.Divisions)})
