@@ -79,12 +79,12 @@ func (t Table) widths() []float64 {
 	return out
 }
 
-// numeric reports whether every cell of a column that is not empty begins with a
-// figure, a sign or a diameter sign: such columns are set to the right.
+// numeric reports whether every cell of a column that is not empty or a dash begins with a
+// figure or a sign, and one at least does: such columns are set to the right.
 func (t Table) numeric(column int) bool {
 	some := false
 	for _, r := range t.Rows {
-		if column < len(r) && r[column] != "" {
+		if column < len(r) && r[column] != "" && r[column] != "–" {
 			if !strings.ContainsAny(r[column][:1], "0123456789+-.") && !strings.HasPrefix(r[column], "−") {
 				return false
 			}
