@@ -36,7 +36,7 @@ func rectangle(c *Call) (scene.Value, *Fail) {
 	}
 	o := &scene.Outline{Name: c.Name, F: c.onPlane(), Even: true}
 	for _, s := range [4]vec.V2{{X: -1, Y: -1}, {X: 1, Y: -1}, {X: 1, Y: 1}, {X: -1, Y: 1}} {
-		o.Corners = append(o.Corners, c.centre().Add(vec.V2{X: s.X * w / 2, Y: s.Y * d / 2}))
+		o.Corners = append(o.Corners, c.centre().Add(vec.V2{X: float64(s.X * w / 2), Y: float64(s.Y * d / 2)}))
 	}
 	return o, nil
 }

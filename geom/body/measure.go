@@ -110,7 +110,7 @@ func (b *Body) fromPole(pole vec.V3) (float64, vec.V3) {
 		near := p.Near(b.middle)
 		m := b.faceMoments(i, near)
 		high := -p.Value(pole) / 3
-		v := m.area * high
+		v := float64(m.area * high)
 		vol += v
 		// the centre of a pyramid is at 3/4 of the way to that of its base
 		first := near.O.Sub(pole).Scale(m.area).Along(near.X, m.s).Along(near.Y, m.t)
@@ -140,7 +140,7 @@ func (b *Body) alongAxis(a vec.V3) (float64, vec.V3) {
 		z := float64(zo*m.area) + float64(zs*m.s) + float64(zt*m.t)
 		zx := float64(zo*m.s) + float64(zs*m.ss) + float64(zt*m.st)
 		zy := float64(zo*m.t) + float64(zs*m.st) + float64(zt*m.tt)
-		vol += k * z
+		vol += float64(k * z)
 		first := o.Scale(z).Along(near.X, zx).Along(near.Y, zy) // integral of z·(p - middle)
 		h := first.Dot(a)
 		sum = sum.Along(first, k).Along(a, -k*h/2) // half of the share along the axis: columns start at the middle

@@ -57,9 +57,9 @@ func (f Form) squeeze(s float64) float64 {
 func (c chunk) param(x float64) float64 {
 	switch k := c.k * x; {
 	case c.form.Periodic():
-		return c.m + 2*math.Atan(k)
+		return c.m + float64(2*math.Atan(k))
 	case c.form == Hyperbola || c.form == HyperbolaEnd:
-		return c.m + 2*math.Atanh(k)
+		return c.m + float64(2*math.Atanh(k))
 	default:
 		return c.m + k
 	}

@@ -46,7 +46,7 @@ func (f Form) zeros(c, p, q, gap float64) []float64 {
 	case Ellipse:
 		return ellipseZeros(c, p, q, gap)
 	case Parabola:
-		if t := -p / (2 * q); q != 0 && math.Abs(c+float64(t*p)/2) <= gap {
+		if t := -p / (2 * q); q != 0 && math.Abs(c+float64(float64(t*p)/2)) <= gap {
 			return []float64{t}
 		}
 		return num.Quadratic(q, p/2, c)

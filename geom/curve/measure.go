@@ -103,7 +103,7 @@ func parabolaLength(uu, uw, ww, lo, hi float64) float64 {
 		v := math.Sqrt(a + float64(4*ww*t*t))
 		s := t * v / 2
 		if a > 0 {
-			s += a / (4 * w) * math.Asinh(2*w*t/math.Sqrt(a))
+			s += float64(a / (4 * w) * math.Asinh(2*w*t/math.Sqrt(a)))
 		}
 		return s
 	}

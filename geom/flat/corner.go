@@ -122,12 +122,12 @@ func (p *Pattern) put(e end, phi float64) {
 		return
 	case rimFrom:
 		m := &p.rims[e.of]
-		m.to -= turn * math.Round((m.from-phi)/turn)
+		m.to -= float64(turn * math.Round((m.from-phi)/turn))
 		m.from = phi
 		return
 	}
 	m := &p.rims[e.of]
-	m.to = phi + turn*math.Round((m.to-phi)/turn)
+	m.to = phi + float64(turn*math.Round((m.to-phi)/turn))
 }
 
 // meets is the angle next to phi at which p and q have the same u. Profiles

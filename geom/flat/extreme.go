@@ -36,11 +36,11 @@ func (p Polar) extremes(a, b float64) []float64 {
 	r := p.rate
 	h := func(t float64) float64 {
 		s, c := math.Sincos(r * t)
-		return float64(p.w(t, 1)*c) + float64(r*p.w(t, 0))*s
+		return float64(p.w(t, 1)*c) + float64(float64(r*p.w(t, 0))*s)
 	}
 	g := func(t float64) float64 {
 		s, c := math.Sincos(r * t)
-		return float64(r*p.w(t, 0))*c - float64(p.w(t, 1)*s)
+		return float64(float64(r*p.w(t, 0))*c) - float64(p.w(t, 1)*s)
 	}
 	cuts := append(p.inflections(a, b), a, b)
 	for q := math.Ceil(r * a / (math.Pi / 2)); float64(q*(math.Pi/2)) < r*b; q++ {

@@ -186,9 +186,9 @@ func (p *Pattern) longest() []reason {
 	for _, phi := range at {
 		switch l := length(phi); {
 		case hi-lo <= size:
-		case l >= hi-tie*hi:
+		case l >= hi-float64(tie*hi):
 			out = append(out, reason{phi, "longest"})
-		case l > size && l <= lo+tie*hi:
+		case l > size && l <= lo+float64(tie*hi):
 			out = append(out, reason{phi, "shortest"})
 		}
 	}

@@ -73,7 +73,7 @@ func EllipticE(phi, m, mc float64) float64 {
 	e := firstE(math.Abs(rest), m, mc)
 	e = math.Copysign(e, rest)
 	if turns != 0 {
-		e += 2 * turns * firstE(math.Pi/2, m, mc)
+		e += float64(2 * turns * firstE(math.Pi/2, m, mc))
 	}
 	return e
 }
@@ -108,9 +108,9 @@ func carlsonF(x, y, z float64) float64 {
 		if max(math.Abs(dx), math.Abs(dy), math.Abs(dz)) < carlsonTol {
 			e2 := float64(dx*dy) - float64(dz*dz)
 			e3 := dx * dy * dz
-			return (1 - e2/10 + e3/14 + float64(e2*e2)/24 - float64(e2*e3)*3/44) / math.Sqrt(a)
+			return (1 - e2/10 + e3/14 + float64(e2*e2)/24 - float64(float64(e2*e3)*3)/44) / math.Sqrt(a)
 		}
-		l := math.Sqrt(x)*math.Sqrt(y) + math.Sqrt(y)*math.Sqrt(z) + math.Sqrt(z)*math.Sqrt(x)
+		l := float64(math.Sqrt(x)*math.Sqrt(y)) + float64(math.Sqrt(y)*math.Sqrt(z)) + float64(math.Sqrt(z)*math.Sqrt(x))
 		x, y, z = (x+l)/4, (y+l)/4, (z+l)/4
 	}
 }
@@ -119,16 +119,16 @@ func carlsonF(x, y, z float64) float64 {
 func carlsonD(x, y, z float64) float64 {
 	sum, k := 0.0, 1.0
 	for {
-		a := (x + y + 3*z) / 5
+		a := (x + y + float64(3*z)) / 5
 		dx, dy, dz := 1-x/a, 1-y/a, 1-z/a
 		if max(math.Abs(dx), math.Abs(dy), math.Abs(dz)) < carlsonTol {
 			xy, zz := dx*dy, dz*dz
-			e2 := xy - 6*zz
-			e3 := (3*xy - 8*zz) * dz
+			e2 := xy - float64(6*zz)
+			e3 := (float64(3*xy) - float64(8*zz)) * dz
 			e4 := 3 * (xy - zz) * zz
 			e5 := xy * zz * dz
 			s := 1 - e2*3/14 + e3/6 + float64(e2*e2)*9/88 - e4*3/22 - float64(e2*e3)*9/52 + e5*3/26
-			return 3*sum + k*s/(a*math.Sqrt(a))
+			return float64(3*sum) + float64(k*s)/(a*math.Sqrt(a))
 		}
 		sx, sy, sz := math.Sqrt(x), math.Sqrt(y), math.Sqrt(z)
 		l := float64(sx*sy) + float64(sy*sz) + float64(sz*sx)

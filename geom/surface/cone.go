@@ -92,8 +92,8 @@ func (s Cone) quadratic(q, d vec.V3, root float64) []float64 {
 	dh, dout := radial(s.F, d)
 	qh, qout := radial(s.F, q)
 	dr, qr := dout.Len(), qout.Len()
-	a := (dr*s.Cos - math.Abs(dh)*s.Sin) * (dr*s.Cos + math.Abs(dh)*s.Sin)
-	c := (qr*s.Cos - math.Abs(qh)*s.Sin) * (qr*s.Cos + math.Abs(qh)*s.Sin)
+	a := (float64(dr*s.Cos) - float64(math.Abs(dh)*s.Sin)) * (float64(dr*s.Cos) + float64(math.Abs(dh)*s.Sin))
+	c := (float64(qr*s.Cos) - float64(math.Abs(qh)*s.Sin)) * (float64(qr*s.Cos) + float64(math.Abs(qh)*s.Sin))
 	b := -float64(qh * dh) // q·d is zero
 	flat := math.Abs(a) <= num.Direction
 	switch {

@@ -37,7 +37,7 @@ func (a V3) Add(b V3) V3 { return V3{a.X + b.X, a.Y + b.Y, a.Z + b.Z} }
 func (a V3) Sub(b V3) V3 { return V3{a.X - b.X, a.Y - b.Y, a.Z - b.Z} }
 
 // Scale returns k·a.
-func (a V3) Scale(k float64) V3 { return V3{k * a.X, k * a.Y, k * a.Z} }
+func (a V3) Scale(k float64) V3 { return V3{float64(k * a.X), float64(k * a.Y), float64(k * a.Z)} }
 
 // Along returns a + k·d.
 func (a V3) Along(d V3, k float64) V3 {
@@ -83,7 +83,7 @@ func (a V2) Add(b V2) V2 { return V2{a.X + b.X, a.Y + b.Y} }
 func (a V2) Sub(b V2) V2 { return V2{a.X - b.X, a.Y - b.Y} }
 
 // Scale returns k·a.
-func (a V2) Scale(k float64) V2 { return V2{k * a.X, k * a.Y} }
+func (a V2) Scale(k float64) V2 { return V2{float64(k * a.X), float64(k * a.Y)} }
 
 // Along returns a + k·d.
 func (a V2) Along(d V2, k float64) V2 { return V2{a.X + float64(k*d.X), a.Y + float64(k*d.Y)} }
