@@ -116,6 +116,10 @@ func again(of *scene.Solid, name string, m vec.Motion) *scene.Solid {
 // moved is the uncut solid of a primitive, moved and under a new name.
 func moved(p *scene.Primitive, name string, m vec.Motion) *scene.Solid {
 	q := &scene.Primitive{Name: name, Form: p.Form, Cylinder: p.Cylinder, Radius: p.Radius, TopRadius: p.TopRadius, Height: p.Height}
+	if p.Form == "sphere" {
+		q.Base = vec.World.At(m.Point(p.Base.O))
+		return ball(q)
+	}
 	if p.Outline == nil {
 		q.Base = baseOn(m.Point(p.Base.O), m.Dir(p.Base.Z))
 		return solid(q)

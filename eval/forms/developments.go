@@ -17,8 +17,8 @@ const minDivisions, maxDivisions, usualDivisions = 3, 360, 12
 func development(c *Call) (scene.Value, *Fail) {
 	of := c.Values["of"][0].(*scene.Solid)
 	d := &scene.Development{Name: c.Name, Of: of, Divisions: usualDivisions, InsideUp: c.Has("up") && c.Words["up"][0] == "inside"}
-	if of.Root.Outline != nil {
-		return nil, fail("cannot-unroll", "of", "%s has no curved face to unroll", of.Name).because("this version unrolls cones and cylinders")
+	if of.Root.Side == nil {
+		return nil, fail("cannot-unroll", "of", "%s cannot be unrolled", of.Name).because("this version unrolls cones and cylinders")
 	}
 	label := of.Root.SideFace
 	if c.Has("face") {

@@ -57,7 +57,7 @@ type Constructor func(c *Call) (scene.Value, *Fail)
 func Constructors() map[string]Constructor {
 	return map[string]Constructor{
 		"line": line, "plane": plane, "rectangle": rectangle, "regular": regular, "outline": outline,
-		"cone": cone, "cylinder": cylinder, "prism": prism, "pyramid": pyramid, "part": part, "copy": copyOf, "ring": ring, "row": row,
+		"cone": cone, "cylinder": cylinder, "prism": prism, "pyramid": pyramid, "sphere": sphere, "part": part, "copy": copyOf, "ring": ring, "row": row,
 		"section": section, "focal_sphere": focalSphere, "development": development, "titles": titles,
 	}
 }
@@ -88,6 +88,8 @@ func MeasureFuncs(typ string) map[string]MeasureFunc {
 		return prismMeasures()
 	case "pyramid":
 		return pyramidMeasures()
+	case "sphere":
+		return sphereSolidMeasures()
 	case "rectangle", "regular", "outline":
 		return outlineMeasures()
 	case "part":

@@ -98,8 +98,8 @@ func partMeasures() map[string]MeasureFunc {
 // generatorMeasure is the generator at an angle: of a part, what is inside it.
 func generatorMeasure(v scene.Value, args []scene.Value) (Measured, *Fail) {
 	s := v.(*scene.Solid)
-	if s.Root.Outline != nil {
-		return Measured{}, fail("no-such-feature", "", "%s has no curved face and so no generators", s.Name)
+	if s.Root.Side == nil {
+		return Measured{}, fail("no-such-feature", "", "%s has no generators", s.Name).because("only cones and cylinders have")
 	}
 	name := fmt.Sprintf("%s.generator(%s)", s.Name, show(args[0]))
 	l := generatorOf(s, name, args[0])

@@ -202,6 +202,9 @@ func featureMeasures() map[string]MeasureFunc {
 		}),
 		"centroid": plain(func(s *scene.Solid) scene.Value { return point(s.Body.Centroid()) }),
 		"axis": solidFunc(func(s *scene.Solid) (Measured, *Fail) {
+			if s.Root.Form == "sphere" {
+				return Measured{}, fail("no-such-measure", "", "a sphere has no one axis")
+			}
 			l := segment(s.Name+".axis", s.Root.Base.O, s.Root.Base.O.Along(s.Root.Base.Z, s.Root.Height))
 			return Measured{l, axisAnchor(s)}, nil
 		}),

@@ -52,7 +52,7 @@ type Group struct {
 // whose labels begin with SideFace+"(".
 type Primitive struct {
 	Name         string
-	Form         string // "cone", "cylinder", "prism", "pyramid"
+	Form         string // "cone", "cylinder", "prism", "pyramid", "sphere" (Base.O is then the centre)
 	Cylinder     bool
 	Outline      *Outline
 	Base         vec.Frame // origin at the base's centre, Z along the axis toward the apex or top
@@ -97,8 +97,9 @@ type Face struct {
 
 // Circle is a circle of space.
 type Circle struct {
-	F vec.Frame // centre and plane
-	R float64   // mm
+	F      vec.Frame // centre and plane
+	R      float64   // mm
+	Sphere bool      // the outline of a sphere: it faces the viewer in every view
 }
 
 // Edge is an edge of a solid: the pieces where two faces meet.

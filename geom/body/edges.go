@@ -45,7 +45,7 @@ func (b *Body) meeting(i, j int) []curve.Arc {
 // trace is the curves of the plane p on the curved face i. A plane that passes an apex within the gap goes
 // through it here: a branch whose vertex cannot be told from the apex has no edge there.
 func (b *Body) trace(p surface.Plane, i int) []curve.Arc {
-	s, ok := b.Faces[i].Surface.(surface.Traced)
+	s, ok := b.Faces[i].Surface.(surface.Met)
 	if !ok {
 		return nil
 	}

@@ -98,6 +98,13 @@ func (b *Body) along(i int, r surface.Ruling) (out []Interval, edge bool) {
 func (b *Body) Contour(d vec.V3) []Edge {
 	var out []Edge
 	for i, f := range b.Faces {
+		if s, ok := f.Surface.(surface.Sphere); ok {
+			for _, a := range b.kept(s.Outline(d), i, i) {
+				if !b.onOther(a, i) {
+					out = append(out, Edge{a, i, i})
+				}
+			}
+		}
 		for _, r := range f.Surface.Contour(d) {
 			if r.D.Cross(d).Len() <= num.Direction {
 				continue
@@ -114,9 +121,20 @@ func (b *Body) Contour(d vec.V3) []Edge {
 	return out
 }
 
+// onOther tells whether the piece of the outline of face i lies in another face too.
+func (b *Body) onOther(a curve.Arc, i int) bool {
+	at, along := probe(a)
+	for _, s := range b.around(at, along) {
+		if s.face != i {
+			return true
+		}
+	}
+	return false
+}
+
 // Extent is the least and the greatest distance along the unit vector n from
 // Middle to the points of the body, mm: exact, since a body's extremes lie on
-// its edges and at its apex.
+// its edges, at its apex and at the poles of its spheres.
 func (b *Body) Extent(n vec.V3) (lo, hi float64) {
 	lo, hi = math.Inf(1), math.Inf(-1)
 	add := func(p vec.V3) {
@@ -132,6 +150,15 @@ func (b *Body) Extent(n vec.V3) (lo, hi float64) {
 	}
 	for _, p := range b.Apexes() {
 		add(p)
+	}
+	for _, f := range b.Faces {
+		if s, ok := f.Surface.(surface.Sphere); ok {
+			for _, p := range [2]vec.V3{s.O.Along(n, s.R), s.O.Along(n, -s.R)} {
+				if b.Side(p) == num.Zero {
+					add(p)
+				}
+			}
+		}
 	}
 	return lo, hi
 }

@@ -13,6 +13,9 @@ import (
 // its generators, and the vector of that area has the constant share sin(half angle) along the axis;
 // on a cylinder the area under an edge is the integral of its height over the girth.
 func (b *Body) FaceArea(i int) float64 {
+	if s, ok := b.Faces[i].Surface.(surface.Sphere); ok {
+		return b.sphereArea(s, i)
+	}
 	sum := 0.0
 	for _, loop := range b.FaceEdges(i) {
 		for _, e := range loop {
@@ -94,6 +97,8 @@ func (b *Body) mass() (float64, vec.V3) {
 			return b.fromPole(s.F.O)
 		case surface.Cylinder:
 			return b.alongAxis(s.F.Z)
+		case surface.Sphere:
+			return b.fromCentre(s)
 		}
 	}
 	return b.fromPole(b.middle)

@@ -96,6 +96,9 @@ func Of(b *body.Body, p surface.Plane, along []vec.V3) (*Section, error) {
 			s.classify(p, along)
 			break
 		}
+		if t, ok := f.Surface.(surface.Sphere); ok {
+			s.onSphere(t, p)
+		}
 	}
 	s.outline(p)
 	return s, nil
@@ -134,6 +137,20 @@ func (s *Section) classify(p surface.Plane, along []vec.V3) {
 	if s.Kind == Circle || s.Kind == Ellipse || s.Kind == Parabola || s.Kind == Hyperbola {
 		s.Conic = &Conic{s.Kind, t.F, t.A, t.B, t.Ecc, t.L, t.Near}
 	}
+}
+
+// onSphere fills in the circle in which the plane meets a sphere, or the point of contact.
+func (s *Section) onSphere(t surface.Sphere, p surface.Plane) {
+	f, r, ok := t.Circle(p, s.rounding(p))
+	if !ok {
+		if math.Abs(p.Value(t.O)) <= t.R+s.rounding(p) {
+			at := t.O.Along(p.F.Z, -p.Value(t.O))
+			s.Kind, s.Apex = Point, &at
+		}
+		return
+	}
+	s.Kind, s.Ground = Circle, ByConstruction
+	s.Conic = &Conic{Circle, f, r, r, 0, r, f.O.Along(f.X, -r)}
 }
 
 func kindOf(s surface.Shape) Kind {

@@ -5,6 +5,7 @@ import (
 
 	"epure/geom/curve"
 	"epure/geom/num"
+	"epure/geom/vec"
 )
 
 // Cross returns the parameters in [T0, T1] at which the arc meets the surface,
@@ -17,6 +18,11 @@ func Cross(s Surface, a curve.Arc, gap float64) []float64 {
 	switch s := s.(type) {
 	case Plane:
 		return a.Cross(s.F.O, s.F.Z, gap)
+	case Sphere:
+		f := vec.World.At(s.O)
+		return inRange(a, a.Vanish(f, func(x, y, z, w num.Poly) num.Poly {
+			return x.Mul(x).Plus(1, y.Mul(y)).Plus(1, z.Mul(z)).Plus(-s.R*s.R, w.Mul(w))
+		}, on), gap)
 	case Cylinder:
 		return inRange(a, a.Vanish(s.F, func(x, y, _, w num.Poly) num.Poly {
 			return x.Mul(x).Plus(1, y.Mul(y)).Plus(-s.R*s.R, w.Mul(w))

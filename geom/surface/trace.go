@@ -88,12 +88,12 @@ func (t Trace) Conic() (curve.Curve, bool) {
 	return curve.Curve{}, false
 }
 
-// Arcs are the curves in which p meets the nappe, see Traced.
+// Arcs are the curves in which p meets the nappe, see Met.
 func (s Cone) Arcs(p Plane, gap float64, _ vec.V3, _ float64) []curve.Arc {
 	return s.Trace(p, gap).arcs()
 }
 
-// Arcs are the curves in which p meets the cylinder, see Traced. A plane so nearly along the axis that both
+// Arcs are the curves in which p meets the cylinder, see Met. A plane so nearly along the axis that both
 // vertices are far off gives the two sides of its ellipse apart, each held by
 // its point at the level of at.
 func (s Cylinder) Arcs(p Plane, gap float64, at vec.V3, size float64) []curve.Arc {
@@ -282,9 +282,15 @@ func (s Cone) throughApex(n vec.V3, b Tilt) Trace {
 // Traced is a surface that knows its trace in a plane.
 type Traced interface {
 	Ruled
+	Met
 	// Trace is what p has in common with the surface; gap is the distance, mm,
 	// within which it passes an apex or touches.
 	Trace(p Plane, gap float64) Trace
+}
+
+// Met is a curved surface that knows the curves in which planes meet it.
+type Met interface {
+	Surface
 	// Arcs are the curves of the trace, whole but for parts that lie very far
 	// from the sphere of the radius size about at, where they are wanted to the last digits.
 	Arcs(p Plane, gap float64, at vec.V3, size float64) []curve.Arc

@@ -86,11 +86,14 @@ func (s *scene) meetBodies(c *cand) {
 }
 
 // contactPlanes are the planes in which sight along d touches the curved
-// faces: each holds the two contour generators of one. An edge on the surface
+// faces: each holds the two contour generators, or the outline, of one. An edge on the surface
 // crosses this plane at a good angle where it only touches the contour's image.
 func contactPlanes(b *body.Body, d vec.V3) []surface.Plane {
 	var out []surface.Plane
 	for _, f := range b.Faces {
+		if s, ok := f.Surface.(surface.Sphere); ok {
+			out = append(out, surface.Plane{F: vec.PlaneFrame(s.O, d)})
+		}
 		r := f.Surface.Contour(d)
 		if len(r) != 2 {
 			continue

@@ -1,7 +1,7 @@
 package catalogue
 
 // Forms is every form, in the order of the manual.
-var Forms = concat(lineForms, outlineForms, solidForms, flatForms, copyForms, groupForms, curveForms, blockForms, viewForms, markForms)
+var Forms = concat(lineForms, outlineForms, solidForms, flatForms, sphereForms, copyForms, groupForms, curveForms, blockForms, viewForms, markForms)
 
 func concat(families ...[]Form) []Form {
 	var all []Form

@@ -64,6 +64,29 @@ var polyhedronMeasures = []Measure{
 	{Name: "face", Kind: KFace, Args: faceOf.Args, Help: faceOf.Help, Example: "$.face($.base)"},
 }
 
+var sphereForms = []Form{
+	{
+		Word: "sphere", Chapter: chSolids, Kind: Kind{Class: Solid, Type: "sphere"},
+		Help: "A sphere.",
+		Clauses: []Clause{
+			{Word: "radius", Takes: []Kind{KLength}, Max: 1, Help: "The radius."},
+			{Word: "diameter", Takes: []Kind{KLength}, Max: 1, Help: "The diameter."},
+			{Word: "centre", Takes: []Kind{KPoint}, Max: 1, Default: "the origin", Help: "The centre."},
+		},
+		Choices: []Choice{{Ways: [][]string{{"radius"}, {"diameter"}}}},
+		Measures: []Measure{
+			{Name: "radius", Kind: KLength, Help: "The radius."},
+			{Name: "diameter", Kind: KLength, Help: "The diameter."},
+			{Name: "centre", Kind: KPoint, Help: "The centre."},
+			{Name: "volume", Kind: KVolume, Help: "The volume."},
+			{Name: "area", Kind: KArea, Help: "The area."},
+			{Name: "centroid", Kind: KPoint, Help: "The centre of the volume."},
+			{Name: "side", Kind: KFace, Help: "The curved face."},
+		},
+		Example: "S = sphere radius 40 mm centre (0, 0, 50 mm)\nT = sphere diameter 2 in\n", Subject: "S",
+	},
+}
+
 var copyForms = []Form{
 	{
 		Word: "copy", Chapter: chSolids, Kind: KSolid, KindOf: "of",

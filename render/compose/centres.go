@@ -54,6 +54,10 @@ next:
 func (p *picture) drawCentres() {
 	var crosses []cross
 	for _, t := range p.turnedSolids() {
+		if t.root.Form == "sphere" {
+			crosses = addCross(crosses, cross{t.root.Name, p.flatten(t.root.Base.O), p.partsBox(t)})
+			continue
+		}
 		axis, ok := t.root.Centreline()
 		if !ok {
 			continue

@@ -56,7 +56,7 @@ func (d *draft) cheapest(options [][]drawing.Mark) []drawing.Mark {
 func (d *draft) radius(m *scene.Dimension, a scene.Radius) {
 	var options [][]drawing.Mark
 	for _, deg := range []float64{45, 30, 60, 135, 150, 120, 225, 315} {
-		r := furniture.Radius{Centre: d.at(d.p.flatten(a.Circle.F.O)), Radius: a.Circle.R * d.scale, Angle: deg * math.Pi / 180, Text: withSign("R", m.Text)}
+		r := furniture.Radius{Centre: d.at(d.p.flatten(a.Circle.F.O)), Radius: a.Circle.R * d.scale, Angle: deg * math.Pi / 180, Text: withSign(sphereSign(a.Circle)+"R", m.Text)}
 		options = append(options, r.Marks(d.dimKey(m), d.style()))
 	}
 	d.addDimension(d.cheapest(options))

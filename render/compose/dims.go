@@ -87,10 +87,26 @@ func (d *draft) spanOf(m *scene.Dimension) (span, bool) {
 	case scene.FlatLinear:
 		s.addAligned(d.at(a.A), d.at(a.B))
 	case scene.Diameter:
-		s.text = withSign(diameterSign, m.Text)
-		d.addDiameter(&s, a.Circle)
+		s.text = withSign(sphereSign(a.Circle)+diameterSign, m.Text)
+		d.addDiameter(&s, d.p.facing(a.Circle))
 	}
 	return s, len(s.ways) > 0
+}
+
+// sphereSign stands before the sign of a diameter or radius of a sphere (ISO 129-1).
+func sphereSign(c scene.Circle) string {
+	if c.Sphere {
+		return "S"
+	}
+	return ""
+}
+
+// facing is the circle as the view sees it: the outline of a sphere faces the viewer.
+func (p *picture) facing(c scene.Circle) scene.Circle {
+	if c.Sphere {
+		c.F = p.frame.At(c.F.O)
+	}
+	return c
 }
 
 // addAligned adds both sides of the length from a to b.
@@ -282,9 +298,9 @@ func (p *picture) seenTrue(a scene.Anchor) bool {
 	case scene.Linear:
 		return !pattern && a.A != a.B && level(a.B.Sub(a.A))
 	case scene.Diameter:
-		return !pattern && (level(a.Circle.F.Z) || square(a.Circle.F.Z))
+		return !pattern && (a.Circle.Sphere || level(a.Circle.F.Z) || square(a.Circle.F.Z))
 	case scene.Radius:
-		return !pattern && square(a.Circle.F.Z)
+		return !pattern && (a.Circle.Sphere || square(a.Circle.F.Z))
 	case scene.Angle:
 		return !pattern && level(a.A) && level(a.B)
 	}

@@ -184,7 +184,10 @@ func (j *job) fillView(p *picture) {
 		p.caption = []string{p.view.By.Name + "–" + p.view.By.Name}
 	}
 	if len(p.caption) == 0 && p.view.Form == "view" {
-		p.caption = []string{"View " + p.name}
+		p.caption = []string{"View"}
+		if p.view.Named {
+			p.caption[0] += " " + p.name
+		}
 	}
 }
 
