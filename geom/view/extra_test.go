@@ -73,6 +73,11 @@ func TestRandomWires(t *testing.T) {
 		r := rand.New(rand.NewPCG(seed+2, uint64(k)))
 		var wires []curve.Arc
 		for _, o := range s.solids {
+			if o.ball {
+				ring := curve.Circle(vec.PlaneFrame(o.f.O, anywhere(r)), o.r0)
+				wires = append(wires, curve.Arc{Curve: ring, T1: 2 * math.Pi})
+				continue
+			}
 			theta, z := 2*math.Pi*r.Float64(), o.h*r.Float64()
 			rim := func(z float64) vec.V3 {
 				rad := o.r0 + (o.r1-o.r0)*z/o.h

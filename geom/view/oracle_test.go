@@ -15,14 +15,22 @@ type solid struct {
 	f         vec.Frame // base at f.O, axis along f.Z
 	r0, r1, h float64
 	cuts      []vec.Frame // material on the side against Z
+	ball      bool        // a sphere of radius r0 about f.O instead; r1 and h are zero
 }
 
 // value is a convex function of p, negative inside, whose size is the distance from the nearest boundary.
 func (s solid) value(p vec.V3) float64 {
 	q := s.f.Local(p)
+	if s.ball {
+		return s.cutBack(p, q.Len()-s.r0)
+	}
 	slope := (s.r0 - s.r1) / s.h
 	v := (math.Hypot(q.X, q.Y) - s.r0 + slope*q.Z) / math.Sqrt(1+slope*slope)
-	v = max(v, -q.Z, q.Z-s.h)
+	return s.cutBack(p, max(v, -q.Z, q.Z-s.h))
+}
+
+// cutBack is the value v at p with the cuts.
+func (s solid) cutBack(p vec.V3, v float64) float64 {
 	for _, c := range s.cuts {
 		v = max(v, p.Sub(c.O).Dot(c.Z))
 	}
@@ -63,7 +71,10 @@ func (s solid) size() float64 { return math.Hypot(s.h, 2*max(s.r0, s.r1)) }
 
 // body is the solid as the package body makes it; false when a cut leaves nothing.
 func (s solid) body() (*body.Body, bool) {
-	b := body.Frustum("K", s.f, s.f, s.r0, s.r1, s.h)
+	b := body.Ball("K", s.f.O, s.r0)
+	if !s.ball {
+		b = body.Frustum("K", s.f, s.f, s.r0, s.r1, s.h)
+	}
 	for i, c := range s.cuts {
 		cut, err := b.Cut(surface.Plane{F: c}, string(rune('P'+i)))
 		if err != nil {
@@ -88,6 +99,21 @@ func (s solid) rim(d vec.V3, n int) []vec.V3 {
 			}
 		}
 		out = append(out, p)
+	}
+	if s.ball {
+		ring := func(f vec.Frame, r float64, skip int) {
+			for k := range n {
+				sin, cos := math.Sincos(2 * math.Pi * (float64(k) + 0.37) / float64(n))
+				keep(f.Point(vec.V3{X: r * cos, Y: r * sin}), skip)
+			}
+		}
+		ring(vec.PlaneFrame(s.f.O, d), s.r0, -1)
+		for i, c := range s.cuts {
+			if high := s.f.O.Sub(c.O).Dot(c.Z); math.Abs(high) < s.r0 {
+				ring(c.At(s.f.O.Along(c.Z, -high)), math.Sqrt(s.r0*s.r0-high*high), i)
+			}
+		}
+		return append(out, s.chords(n)...)
 	}
 	radius := func(z float64) float64 { return s.r0 + (s.r1-s.r0)*z/s.h }
 	side := func(theta, z float64) vec.V3 {
@@ -134,6 +160,9 @@ func (s solid) chords(n int) []vec.V3 {
 	planes := []plane{{s.f.O, s.f.Z.Neg()}, {s.f.Point(vec.V3{Z: s.h}), s.f.Z}}
 	if s.r1 == 0 {
 		planes = planes[:1]
+	}
+	if s.ball {
+		planes = nil
 	}
 	for _, c := range s.cuts {
 		planes = append(planes, plane{c.O, c.Z})
@@ -198,11 +227,13 @@ func random(r *rand.Rand, square bool) solid {
 		at = func() float64 { return float64(20 * (r.IntN(15) - 7)) }
 	}
 	s := solid{f: vec.PlaneFrame(vec.V3{X: at(), Y: at(), Z: at()}, turn(r)), r0: num(), h: num()}
-	switch r.IntN(3) {
+	switch r.IntN(4) {
 	case 0:
 		s.r1 = s.r0
 	case 1:
 		s.r1 = num()
+	case 2:
+		s.ball, s.h = true, 0
 	}
 	for range r.IntN(3) {
 		o := s.f.Point(vec.V3{X: (r.Float64() - 0.5) * s.r0, Y: (r.Float64() - 0.5) * s.r0, Z: s.h * r.Float64()})

@@ -71,6 +71,9 @@ func beside(r *rand.Rand, s solid) solid {
 		return c
 	}
 	c.f = s.f.At(s.f.Point(vec.V3{Z: s.h}))
+	if s.ball { // the next one touches it in a point
+		c.f = s.f.At(s.f.Point(vec.V3{Z: 2 * s.r0}))
+	}
 	c.cuts = nil
 	return c
 }
