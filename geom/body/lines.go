@@ -132,7 +132,7 @@ func (b *Body) onOther(a curve.Arc, i int) bool {
 	return false
 }
 
-// Extent is the least and the greatest distance along the unit vector n from
+// Extent is the least and the greatest distance along n (times its length) from
 // Middle to the points of the body, mm: exact, since a body's extremes lie on
 // its edges, at its apex and at the poles of its spheres.
 func (b *Body) Extent(n vec.V3) (lo, hi float64) {
@@ -153,7 +153,8 @@ func (b *Body) Extent(n vec.V3) (lo, hi float64) {
 	}
 	for _, f := range b.Faces {
 		if s, ok := f.Surface.(surface.Sphere); ok {
-			for _, p := range [2]vec.V3{s.O.Along(n, s.R), s.O.Along(n, -s.R)} {
+			u := n.Unit()
+			for _, p := range [2]vec.V3{s.O.Along(u, s.R), s.O.Along(u, -s.R)} {
 				if b.Side(p) == num.Zero {
 					add(p)
 				}

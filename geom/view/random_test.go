@@ -49,6 +49,9 @@ func newRandom(k int) randomScene {
 	if square || r.IntN(3) == 0 {
 		s.f = vec.ViewFrame(along(r))
 	}
+	if r.IntN(4) == 0 { // an oblique pictorial
+		s.f.X, s.f.Y = s.f.X.Scale(1.25).Along(s.f.Y, 0.4), s.f.Y.Scale(0.75)
+	}
 	for n := 1 + r.IntN(6); len(s.solids) < n; {
 		one := random(r, square)
 		if square && len(s.solids) > 0 && r.IntN(3) == 0 {

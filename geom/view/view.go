@@ -49,7 +49,8 @@ func (p Piece) SpaceAt(t float64) float64 {
 	return track{p.Image, p.flat, p.Space.T0, p.Space.T1}.space(t)
 }
 
-// Lines returns what is seen of the bodies in the view f (f.Z toward the viewer): every
+// Lines returns what is seen of the bodies in the view f (f.Z, a unit vector, toward the viewer; X and Y square
+// to it but not necessarily to each other, nor unit vectors): every
 // visible and hidden piece of their edges and contours. Where images coincide one
 // piece is drawn: a visible one before a hidden one, then the one nearest the viewer,
 // then the one of the lowest body and edge. Edges seen end-on vanish. Neighbouring pieces of one
