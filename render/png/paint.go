@@ -1,6 +1,7 @@
 package png
 
 import (
+	"fmt"
 	"image"
 	"image/color"
 	"math"
@@ -9,6 +10,7 @@ import (
 	"github.com/tdewolff/canvas/renderers/rasterizer"
 
 	"epure/render/drawing"
+	"epure/render/font"
 )
 
 // Paths on the image, in drawing order.
@@ -20,15 +22,22 @@ type coat struct {
 	grey   uint8
 }
 
-// coats returns what the marks paint, in order.
-func (g page) coats(marks []drawing.Mark) []coat {
+// coats returns what the marks paint, in order. The error is a mark that reaches
+// further than mostReach.
+func (g page) coats(marks []drawing.Mark) ([]coat, error) {
 	var out []coat
 	add := func(p *canvas.Path, grey float64) {
+		if !g.paintable(p) {
+			p = p.And(g.around(1).ToPath())
+		}
 		if !p.Empty() {
 			out = append(out, coat{p, p.FastBounds(), uint8(math.Round(255 * max(0, min(1, grey))))})
 		}
 	}
 	for _, m := range marks {
+		if b := font.Bounds(m.Shape).Grow(max(0, m.Pen.Width)); !b.Empty() && max(-b.Min.X, -b.Min.Y, b.Max.X, b.Max.Y)*g.scale > mostReach {
+			return nil, fmt.Errorf("mark %q %q %q: %w", m.Key.View, m.Key.Thing, m.Key.Feature, ErrTooLarge)
+		}
 		if t, ok := m.Shape.(drawing.Text); ok {
 			add(g.letters(t), 0)
 			continue
@@ -40,7 +49,21 @@ func (g page) coats(marks []drawing.Mark) []coat {
 			add(g.line(m.Shape, m.Pen), 0)
 		}
 	}
-	return out
+	return out, nil
+}
+
+// mostReach is how far off, in pixels, a mark may reach. Further out the library,
+// which works to 1e-8 pixel, has no digits left to cut with.
+const mostReach = 1e8
+
+// paintable reports whether the library's painter takes the path: its coordinates,
+// 26 bits with 6 for the fraction, are multiplied by 64, which leaves 2^19 pixels
+// from one point to another.
+func (g page) paintable(p *canvas.Path) bool { return g.around(mostSide).Contains(p.FastBounds()) }
+
+// around is the page and a border of so many pixels.
+func (g page) around(border float64) canvas.Rect {
+	return canvas.Rect{X0: -border, Y0: -border, X1: g.w + border, Y1: g.h + border}
 }
 
 // bandPixels bounds what is painted at once: the library paints in colour, four

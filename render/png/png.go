@@ -3,7 +3,7 @@
 //
 // Curves are lowered to the same cubics as in the PDF and dashed by the same
 // arrays; a general drawing library outlines and paints them, within a tenth of a
-// pixel. What it gets wrong is kept from it: see path.go and near.go.
+// pixel. What it gets wrong is kept from it: see path.go and paint.go.
 package png
 
 import (
@@ -19,26 +19,35 @@ import (
 	"epure/render/drawing"
 )
 
-// ErrTooLarge says that an image would have no or too many pixels.
+// ErrTooLarge says that an image would have no or too many pixels, or a mark
+// reaches too many pixels off it.
 var ErrTooLarge = errors.New("image is too large")
 
 // mostPixels bounds an image: A0 at 400 dots an inch takes 248 million.
 const mostPixels = 1 << 28
 
+// mostSide bounds its sides: at 400 dots an inch, eight metres.
+const mostSide = 1 << 17
+
 // Write returns the image at dpi dots an inch. The same sheet gives the same
-// bytes. The errors are a mark with a coordinate that is not finite, and a size
-// that is nothing or over 2^28 pixels.
+// bytes. The errors are a mark with a coordinate that is not finite, and with
+// ErrTooLarge a size that is nothing, over 2^28 pixels or over 2^17 a side, or a
+// mark that reaches over 1e8 pixels off.
 func Write(s drawing.Sheet, dpi float64) ([]byte, error) {
 	if err := drawing.Check(s); err != nil {
 		return nil, fmt.Errorf("png: %w", err)
 	}
 	scale := dpi / 25.4
 	w, h := math.Round(s.Width*scale), math.Round(s.Height*scale)
-	if !(w >= 1 && h >= 1 && w*h <= mostPixels) {
+	if !(w >= 1 && h >= 1 && w <= mostSide && h <= mostSide && w*h <= mostPixels) {
 		return nil, fmt.Errorf("png: %v by %v mm at %v dpi: %w", s.Width, s.Height, dpi, ErrTooLarge)
 	}
+	coats, err := page{scale: scale, w: w, h: h, height: s.Height}.coats(s.Marks)
+	if err != nil {
+		return nil, fmt.Errorf("png: %w", err)
+	}
 	img := image.NewGray(image.Rect(0, 0, int(w), int(h)))
-	paint(img, page{scale: scale, w: w, h: h, height: s.Height}.coats(s.Marks))
+	paint(img, coats)
 	var b bytes.Buffer
 	if err := png.Encode(&b, img); err != nil {
 		return nil, fmt.Errorf("png: %w", err)
