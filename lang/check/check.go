@@ -30,12 +30,14 @@ func Check(tree *syntax.File, bag *diag.Bag) *Model {
 }
 
 type checker struct {
-	bag    *diag.Bag
-	model  *Model
-	tops   map[string]*Symbol
-	scope  map[*Symbol]map[string]*Symbol // the names inside each block
-	within *Symbol                        // whose expressions are being looked at
-	path   []link                         // the symbols being resolved, for cycles
+	bag      *diag.Bag
+	model    *Model
+	tops     map[string]*Symbol
+	scope    map[*Symbol]map[string]*Symbol // the names inside each block
+	within   *Symbol                        // whose expressions are being looked at
+	topNames []string                       // the names outside of blocks, made when the first is not found
+	guesses  int
+	path     []link // the symbols being resolved, for cycles
 }
 
 type link struct {

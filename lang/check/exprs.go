@@ -111,21 +111,38 @@ func (c *checker) name(n *syntax.Name) catalogue.Kind {
 	return s.Kind
 }
 
-func (c *checker) unknownName(n *syntax.Name) {
+// mostGuesses is how many unknown names of a file get a suggestion: each is compared with every
+// name of the file, which would take long in a file that is nothing but mistakes.
+const mostGuesses = 200
+
+// namesHere are the names that could have been meant where the checker stands: those of
+// the block first.
+func (c *checker) namesHere() []string {
+	if c.guesses++; c.guesses > mostGuesses {
+		return nil
+	}
+	if c.topNames == nil {
+		for _, s := range c.model.Symbols {
+			if s.Parent == nil {
+				c.topNames = append(c.topNames, s.Name)
+			}
+		}
+		for _, b := range catalogue.Builtins {
+			c.topNames = append(c.topNames, b.Name)
+		}
+	}
+	if c.within == nil || c.within.Parent == nil {
+		return c.topNames
+	}
 	var words []string
-	if c.within != nil && c.within.Parent != nil {
-		for _, m := range c.within.Parent.Members {
-			words = append(words, m.Name)
-		}
+	for _, m := range c.within.Parent.Members {
+		words = append(words, m.Name)
 	}
-	for _, s := range c.model.Symbols {
-		if s.Parent == nil {
-			words = append(words, s.Name)
-		}
-	}
-	for _, b := range catalogue.Builtins {
-		words = append(words, b.Name)
-	}
+	return append(words, c.topNames...)
+}
+
+func (c *checker) unknownName(n *syntax.Name) {
+	words := c.namesHere()
 	d := c.report("unknown-name", n.Span(), "nothing is called %s here", source.Quote(n.Text))
 	switch w, ok := spell.Nearest(n.Text, words); {
 	case ok:
