@@ -138,8 +138,12 @@ func (l *layout) clusters() []cluster {
 	return out
 }
 
+// mostFilled is the share of a sheet that things may cover: with more it would be cramped however
+// they lie, and looking for a way is what takes longest.
+const mostFilled = 0.8
+
 // mayFit weeds out what cannot fit: a cluster larger than the space, or more
-// area than there is.
+// area than may be covered; a figure, which is cropped round its content, may be full.
 func (l *layout) mayFit(all []cluster) bool {
 	area, s := 0.0, l.space.Grow(-leastEdge)
 	for _, c := range all {
@@ -151,7 +155,11 @@ func (l *layout) mayFit(all []cluster) bool {
 	for _, e := range l.blocked {
 		area += e.area()
 	}
-	return area <= s.Width()*s.Height()
+	free := s.Width() * s.Height()
+	if !l.tight {
+		free *= mostFilled
+	}
+	return area <= free
 }
 
 // enoughTries is the number of arrangements among which the roomiest is chosen.
